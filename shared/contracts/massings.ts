@@ -1,0 +1,74 @@
+import { z } from 'zod';
+import { massingIssueSchema } from '../massing/massing-issue.ts';
+import { polygonalSchema } from '../geometry/geojson-schema.ts';
+
+export const massingLimits = {
+  fileBytes: 25 * 1024 * 1024,
+  vertices: 20_000,
+  topM: 1000,
+} as const;
+
+export const massingBlockFeatureSchema = z.object({
+  type: z.literal('Feature'),
+  properties: z.object({
+    id: z.string(),
+    role: z.enum(['proposed', 'existing']),
+    baseM: z.number(),
+    topM: z.number(),
+    storeys: z.int().nullable(),
+    name: z.string().nullable(),
+  }),
+  geometry: polygonalSchema,
+});
+
+export const massingFiguresSchema = z.object({
+  proposedBlocks: z.int(),
+  existingBlocks: z.int(),
+  heightM: z.number().nullable(),
+  storeys: z.int().nullable(),
+  footprintM2: z.number(),
+  volumeM3: z.number(),
+});
+export type MassingFigures = z.infer<typeof massingFiguresSchema>;
+
+export const massingSummarySchema = z.object({
+  revision: z.int(),
+  fileName: z.string(),
+  sizeBytes: z.int(),
+  /** SHA-256 of the bytes as sent, hexadecimal. */
+  sha256: z.string(),
+  uploadedAt: z.iso.datetime(),
+  uploadedByName: z.string(),
+  /** No issue of severity `error`. */
+  sound: z.boolean(),
+  figures: massingFiguresSchema,
+});
+export type MassingSummary = z.infer<typeof massingSummarySchema>;
+
+export const massingDetailSchema = massingSummarySchema.extend({
+  issues: z.array(massingIssueSchema),
+  blocks: z.object({
+    type: z.literal('FeatureCollection'),
+    features: z.array(massingBlockFeatureSchema),
+  }),
+});
+export type MassingDetail = z.infer<typeof massingDetailSchema>;
+
+export const massingListSchema = z.object({ rows: z.array(massingSummarySchema) });
+
+/** What changed from one revision to another, block by block. */
+export const massingComparisonSchema = z.object({
+  from: z.int(),
+  to: z.int(),
+  blocks: z.array(
+    z.object({
+      id: z.string(),
+      change: z.enum(['added', 'removed', 'changed', 'same']),
+      before: z.object({ baseM: z.number(), topM: z.number(), footprintM2: z.number() }).nullable(),
+      after: z.object({ baseM: z.number(), topM: z.number(), footprintM2: z.number() }).nullable(),
+    }),
+  ),
+  figuresBefore: massingFiguresSchema,
+  figuresAfter: massingFiguresSchema,
+});
+export type MassingComparison = z.infer<typeof massingComparisonSchema>;
