@@ -1,6 +1,6 @@
 import { z } from 'zod';
-import { caseStateSchema } from './case-life.ts';
 import { lngLatSchema, polygonalSchema } from '../geometry/geojson-schema.ts';
+import { caseStateSchema } from './case-life.ts';
 import { listQuerySchema, pageSchema } from './paging.ts';
 import { roleSchema } from './people.ts';
 

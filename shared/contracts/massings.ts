@@ -1,6 +1,6 @@
 import { z } from 'zod';
-import { massingIssueSchema } from '../massing/massing-issue.ts';
 import { polygonalSchema } from '../geometry/geojson-schema.ts';
+import { massingIssueSchema } from '../massing/massing-issue.ts';
 
 export const massingLimits = {
   fileBytes: 25 * 1024 * 1024,

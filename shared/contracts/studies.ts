@@ -1,8 +1,8 @@
 import { z } from 'zod';
+import { multiPolygonSchema } from '../geometry/geojson-schema.ts';
 import { sunLedgerSchema } from '../receptors/sun-ledger-schema.ts';
 import { findingSchema, studyFindingsSchema } from '../study/evidence-schema.ts';
 import { studyStatusSchema } from './cases.ts';
-import { multiPolygonSchema } from '../geometry/geojson-schema.ts';
 import { listQuerySchema, pageSchema } from './paging.ts';
 
 export const studyDetailSchema = z.object({
