@@ -1,0 +1,35 @@
+import type { EntityManager, Knex } from '@mikro-orm/postgresql';
+import type PgBoss from 'pg-boss';
+import type { JobDefinition } from './job-definitions.ts';
+
+/**
+ * Puts a job into the queue on the transaction of `em`: it is there when the transaction commits,
+ * and was never there when it rolls back.
+ */
+export async function enqueueJob<Payload extends object>(
+  em: EntityManager,
+  queue: PgBoss,
+  definition: JobDefinition<Payload>,
+  payload: Payload,
+): Promise<void> {
+  const transaction = em.getTransactionContext<Knex.Transaction>();
+  if (transaction === undefined) throw new Error('A job is enqueued inside a transaction.');
+  const id = await queue.send(definition.id, definition.payload.parse(payload), {
+    db: { executeSql: (text, values) => execute(transaction, text, values) },
+  });
+  if (id === null) throw new Error(`The queue took no job ${definition.id}.`);
+}
+
+/** Runs a statement with the placeholders $1, $2 … on a transaction that writes them as question marks. */
+async function execute(
+  transaction: Knex.Transaction,
+  text: string,
+  values: unknown[],
+): Promise<{ rows: { id: string }[] }> {
+  const bindings: Knex.Value[] = [];
+  const sql = text.replace(/\?/g, '\\?').replace(/\$(\d+)/g, (_, position: string) => {
+    bindings.push((values[Number(position) - 1] ?? null) as Knex.Value);
+    return '?';
+  });
+  return transaction.raw<{ rows: { id: string }[] }>(sql, bindings);
+}
