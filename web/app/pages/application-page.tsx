@@ -1,0 +1,9 @@
+import { PageHeading } from '../../components/page-heading.tsx';
+
+export function ApplicationPage() {
+  return (
+    <div className="sheet-width py-8">
+      <PageHeading>Application</PageHeading>
+    </div>
+  );
+}

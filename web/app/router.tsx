@@ -1,0 +1,93 @@
+import { createBrowserRouter } from 'react-router-dom';
+import { Loading } from '../components/loading.tsx';
+import { deskRoutes } from './desk-routes.ts';
+import { AppLayout } from './layouts/app-layout.tsx';
+import { RequireRole } from './layouts/require-role.tsx';
+import { ErrorPage } from './pages/error-page.tsx';
+import { HomePage } from './pages/home-page.tsx';
+import { NotFoundPage } from './pages/not-found-page.tsx';
+import { paths } from './paths.ts';
+
+/** The first public page comes with the shell; every other page is loaded when it is opened. */
+export const router = createBrowserRouter([
+  {
+    element: <AppLayout />,
+    errorElement: <ErrorPage />,
+    HydrateFallback: Loading,
+    children: [
+      {
+        errorElement: <ErrorPage />,
+        children: [
+          { path: paths.home.path, element: <HomePage /> },
+          {
+            path: paths.publicCase.path,
+            lazy: async () => ({ Component: (await import('./pages/case-page.tsx')).CasePage }),
+          },
+          {
+            path: paths.method.path,
+            lazy: async () => ({ Component: (await import('./pages/method-page.tsx')).MethodPage }),
+          },
+          {
+            path: paths.signIn.path,
+            lazy: async () => ({
+              Component: (await import('./pages/sign-in-page.tsx')).SignInPage,
+            }),
+          },
+          {
+            path: paths.invitation.path,
+            lazy: async () => ({
+              Component: (await import('./pages/invitation-page.tsx')).InvitationPage,
+            }),
+          },
+          {
+            element: <RequireRole roles={['applicant']} />,
+            children: [
+              {
+                path: paths.applications.path,
+                lazy: async () => ({
+                  Component: (await import('./pages/applications-page.tsx')).ApplicationsPage,
+                }),
+              },
+              {
+                path: paths.newApplication.path,
+                lazy: async () => ({
+                  Component: (await import('./pages/new-application-page.tsx')).NewApplicationPage,
+                }),
+              },
+              {
+                path: paths.application.path,
+                lazy: async () => ({
+                  Component: (await import('./pages/application-page.tsx')).ApplicationPage,
+                }),
+              },
+            ],
+          },
+          {
+            element: <RequireRole roles={['board', 'planner', 'administrator']} />,
+            children: [
+              {
+                path: paths.hearings.path,
+                lazy: async () => ({
+                  Component: (await import('./pages/hearings-page.tsx')).HearingsPage,
+                }),
+              },
+            ],
+          },
+          {
+            element: <RequireRole roles={['planner', 'administrator']} />,
+            children: [
+              ...deskRoutes,
+              {
+                path: paths.adminRules.path,
+                lazy: async () => ({
+                  Component: (await import('./pages/admin-rules-page.tsx')).AdminRulesPage,
+                }),
+              },
+            ],
+          },
+          { path: '*', element: <NotFoundPage /> },
+        ],
+      },
+    ],
+  },
+]);

@@ -1,0 +1,11 @@
+import { useState } from 'react';
+import { NoonMark } from '../../../components/noon-mark.tsx';
+import { usePlace } from '../../../lib/place-context.ts';
+import { noonAltitudeDeg } from '../noon-altitude.ts';
+
+/** The mark, redrawn for this place and today. */
+export function PlaceMark() {
+  const { municipality } = usePlace();
+  const [nowMs] = useState(() => Date.now());
+  return <NoonMark noonAltitudeDeg={noonAltitudeDeg(nowMs, municipality.latitude)} />;
+}

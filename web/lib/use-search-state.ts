@@ -1,0 +1,25 @@
+import { useCallback } from 'react';
+import { useSearchParams } from 'react-router-dom';
+
+/**
+ * One search parameter of the address as state, so that a colleague who opens the link sees the same.
+ * Setting it replaces the history entry; null or '' takes it out.
+ */
+export function useSearchState(name: string): [string | null, (value: string | null) => void] {
+  const [parameters, setParameters] = useSearchParams();
+  const set = useCallback(
+    (value: string | null) => {
+      setParameters(
+        (before) => {
+          const after = new URLSearchParams(before);
+          if (value === null || value === '') after.delete(name);
+          else after.set(name, value);
+          return after;
+        },
+        { replace: true, preventScrollReset: true },
+      );
+    },
+    [name, setParameters],
+  );
+  return [parameters.get(name), set];
+}
