@@ -10,11 +10,12 @@ export function useSearchState(name: string): [string | null, (value: string | n
   const set = useCallback(
     (value: string | null) => {
       setParameters(
-        (before) => {
-          const after = new URLSearchParams(before);
-          if (value === null || value === '') after.delete(name);
-          else after.set(name, value);
-          return after;
+        () => {
+          // The address bar, not the last render: another control may have written meanwhile.
+          const current = new URLSearchParams(window.location.search);
+          if (value === null || value === '') current.delete(name);
+          else current.set(name, value);
+          return current;
         },
         { replace: true, preventScrollReset: true },
       );

@@ -5,7 +5,7 @@ import { noonAltitudeDeg } from '../noon-altitude.ts';
 
 /** The mark, redrawn for this place and today. */
 export function PlaceMark() {
-  const { municipality } = usePlace();
+  const { longitude, latitude } = usePlace().municipality;
   const [nowMs] = useState(() => Date.now());
-  return <NoonMark noonAltitudeDeg={noonAltitudeDeg(nowMs, municipality.latitude)} />;
+  return <NoonMark noonAltitudeDeg={noonAltitudeDeg(nowMs, longitude, latitude)} />;
 }
