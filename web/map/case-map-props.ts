@@ -1,0 +1,45 @@
+import type { ReactNode } from 'react';
+import type { InstantShadows } from '../../shared/contracts/studies.ts';
+import type { LngLat, Polygonal } from '../../shared/geometry/geojson-schema.ts';
+import type { Camera } from './camera-in-url.ts';
+import type { Bounds, MapBlock, MapPin, MapReceptor } from './map-features.ts';
+import type { ShadowLayer } from './map-layers.ts';
+
+/** What lies under the place that a person pointed at. */
+export interface MapPick {
+  lngLat: LngLat;
+  parcel: { number: string; address: string } | null;
+  receptor: string | null;
+  pin: string | null;
+}
+
+export interface CaseMapProps {
+  /** What the map shows, in words. */
+  label: string;
+  /** The view while the person has not moved the map; new bounds frame it anew. */
+  bounds: Bounds;
+  /** Where the person has moved it, from `useCameraInUrl`. */
+  camera?: Camera | null;
+  onCameraChange?: (camera: Camera) => void;
+  site?: Polygonal | null;
+  blocks?: readonly MapBlock[];
+  shadows?: InstantShadows | null;
+  layer?: ShadowLayer;
+  receptors?: readonly MapReceptor[];
+  chosenReceptor?: string | null;
+  /** Numbers of the parcels that are picked out, in marigold. */
+  pickedParcels?: readonly string[];
+  pins?: readonly MapPin[];
+  /** `pick` shows a crosshair: the person is asked to point at something. */
+  mode?: 'look' | 'pick';
+  /** A click, or Enter and the space bar for the place in the middle. */
+  onPick?: (pick: MapPick) => void;
+  /** The title block: laid over the map's corner, under it where that is narrow. */
+  titleBlock?: ReactNode;
+  /** Shown in place of the map where the browser cannot draw it; a plan drawing, a list. */
+  fallback?: ReactNode;
+  /** The words or the link that lead to the same as a table. */
+  alternative?: ReactNode;
+  /** The height; a telephone's screen keeps room to scroll by. */
+  className?: string;
+}

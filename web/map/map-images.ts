@@ -1,0 +1,82 @@
+import { mapImages } from './map-layers.ts';
+import { mapPalette as colour } from './map-palette.ts';
+
+/** Device pixels per CSS pixel at which the images are drawn. */
+export const imagePixelRatio = 2;
+
+/** The images that the layers name, drawn on a canvas; no file is fetched. */
+export function drawMapImages(): Map<string, ImageData> {
+  return new Map([
+    [mapImages.hatch, draw(8, 8, drawHatch)],
+    [mapImages.cross, draw(18, 18, drawCross)],
+    [mapImages.pin, draw(20, 26, drawPin)],
+  ]);
+}
+
+function draw(
+  width: number,
+  height: number,
+  paint: (context: CanvasRenderingContext2D, width: number, height: number) => void,
+): ImageData {
+  const canvas = document.createElement('canvas');
+  canvas.width = width * imagePixelRatio;
+  canvas.height = height * imagePixelRatio;
+  const context = canvas.getContext('2d');
+  if (context === null) throw new Error('This browser draws on no canvas.');
+  context.scale(imagePixelRatio, imagePixelRatio);
+  paint(context, width, height);
+  return context.getImageData(0, 0, canvas.width, canvas.height);
+}
+
+/** A diagonal that meets itself at every edge, so that the tiles join without a seam. */
+function drawHatch(context: CanvasRenderingContext2D, width: number, height: number): void {
+  context.fillStyle = `${colour.madder}24`;
+  context.fillRect(0, 0, width, height);
+  context.strokeStyle = colour.madder;
+  context.lineWidth = 1.5;
+  context.beginPath();
+  for (const shift of [-width, 0, width]) {
+    context.moveTo(shift - 2, height + 2);
+    context.lineTo(shift + width + 2, -2);
+  }
+  context.stroke();
+}
+
+/** The cross of "not met" on a disc of paper. */
+function drawCross(context: CanvasRenderingContext2D, width: number): void {
+  const middle = width / 2;
+  context.fillStyle = colour.sheet;
+  context.strokeStyle = colour.madder;
+  context.lineWidth = 1;
+  context.beginPath();
+  context.arc(middle, middle, middle - 1, 0, 2 * Math.PI);
+  context.fill();
+  context.stroke();
+  context.lineWidth = 2.2;
+  context.beginPath();
+  context.moveTo(middle - 4, middle - 4);
+  context.lineTo(middle + 4, middle + 4);
+  context.moveTo(middle + 4, middle - 4);
+  context.lineTo(middle - 4, middle + 4);
+  context.stroke();
+}
+
+/** A pin of paper with an ink outline; its tip is the place. */
+function drawPin(context: CanvasRenderingContext2D, width: number, height: number): void {
+  const middle = width / 2;
+  const radius = middle - 1.5;
+  context.fillStyle = colour.sheet;
+  context.strokeStyle = colour.ink;
+  context.lineWidth = 1.6;
+  context.beginPath();
+  context.moveTo(middle, height - 1);
+  context.lineTo(middle - radius * 0.82, middle + radius * 0.57);
+  context.arc(middle, middle, radius, Math.PI * 0.8, Math.PI * 0.2);
+  context.closePath();
+  context.fill();
+  context.stroke();
+  context.fillStyle = colour.ink;
+  context.beginPath();
+  context.arc(middle, middle, 2.6, 0, 2 * Math.PI);
+  context.fill();
+}

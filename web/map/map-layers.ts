@@ -1,0 +1,436 @@
+import type {
+  ExpressionSpecification,
+  LayerSpecification,
+  SourceSpecification,
+  StyleSpecification,
+} from 'maplibre-gl';
+import { type TileLayer } from '../../shared/contracts/base-data.ts';
+import { mapPalette as colour } from './map-palette.ts';
+
+/** What is drawn of an instant: what is shaded now, what will be, or what is shaded only then. */
+export const shadowLayers = ['before', 'after', 'net-new'] as const;
+export type ShadowLayer = (typeof shadowLayers)[number];
+
+/** The sources that the page fills with its own data. */
+export const overlaySources = [
+  'shadows',
+  'site',
+  'blocks',
+  'block-labels',
+  'receptors',
+  'not-met',
+  'pins',
+] as const;
+export type OverlaySource = (typeof overlaySources)[number];
+
+/** Images that `map-images.ts` draws. */
+export const mapImages = { hatch: 'net-new-hatch', cross: 'not-met-cross', pin: 'pin' } as const;
+
+const baseTiles: readonly TileLayer[] = [
+  'open-space',
+  'water',
+  'streets',
+  'street-lines',
+  'parcels',
+  'buildings',
+];
+const font = ['Public Sans'];
+
+/** A chain-dotted line: long dash, gap, dot, gap, in widths of the line. */
+const chainDotted = [7, 2, 1, 2];
+
+const kindIs = (kind: string): ExpressionSpecification => ['==', ['get', 'kind'], kind];
+const roleIs = (role: string): ExpressionSpecification => ['==', ['get', 'role'], role];
+
+/** Paper, water, streets, open space, under the shadows. */
+const groundLayers: LayerSpecification[] = [
+  { id: 'paper', type: 'background', paint: { 'background-color': colour.sheet } },
+  {
+    id: 'open-space',
+    type: 'fill',
+    source: 'open-space',
+    'source-layer': 'open-space',
+    paint: { 'fill-color': colour.openSpace },
+  },
+  {
+    id: 'water',
+    type: 'fill',
+    source: 'water',
+    'source-layer': 'water',
+    paint: { 'fill-color': colour.water },
+  },
+  {
+    id: 'water-shore',
+    type: 'line',
+    source: 'water',
+    'source-layer': 'water',
+    paint: { 'line-color': colour.ink, 'line-opacity': 0.35, 'line-width': 0.8 },
+  },
+  {
+    id: 'streets',
+    type: 'fill',
+    source: 'streets',
+    'source-layer': 'streets',
+    paint: { 'fill-color': colour.street },
+  },
+];
+
+const shadowLayersOnMap: LayerSpecification[] = [
+  ...(['before', 'after'] as const).flatMap((kind): LayerSpecification[] => [
+    {
+      id: `shadow-${kind}`,
+      type: 'fill',
+      source: 'shadows',
+      filter: kindIs(kind),
+      paint: { 'fill-color': colour.shadow, 'fill-opacity': 0.35, 'fill-antialias': false },
+    },
+    {
+      id: `shadow-${kind}-outline`,
+      type: 'line',
+      source: 'shadows',
+      filter: kindIs(kind),
+      paint: { 'line-color': colour.shadow, 'line-width': 1 },
+    },
+  ]),
+  {
+    id: 'shadow-net-new',
+    type: 'fill',
+    source: 'shadows',
+    filter: kindIs('netNew'),
+    paint: { 'fill-pattern': mapImages.hatch },
+  },
+  {
+    id: 'shadow-net-new-outline',
+    type: 'line',
+    source: 'shadows',
+    filter: kindIs('netNew'),
+    paint: { 'line-color': colour.madder, 'line-width': 1 },
+  },
+];
+
+/** Lot lines and buildings, over the shadows as in a plan. */
+const lotLayers: LayerSpecification[] = [
+  // Invisible, but the pointer finds the parcel under it here.
+  {
+    id: 'parcels-fill',
+    type: 'fill',
+    source: 'parcels',
+    'source-layer': 'parcels',
+    minzoom: 14,
+    paint: { 'fill-color': colour.sheet, 'fill-opacity': 0 },
+  },
+  {
+    id: 'parcels',
+    type: 'line',
+    source: 'parcels',
+    'source-layer': 'parcels',
+    minzoom: 14,
+    paint: {
+      'line-color': colour.ink,
+      'line-opacity': ['interpolate', ['linear'], ['zoom'], 14, 0.12, 17, 0.3],
+      'line-width': 0.8,
+    },
+  },
+  {
+    id: 'buildings',
+    type: 'fill',
+    source: 'buildings',
+    'source-layer': 'buildings',
+    paint: { 'fill-color': colour.building },
+  },
+  {
+    id: 'buildings-outline',
+    type: 'line',
+    source: 'buildings',
+    'source-layer': 'buildings',
+    paint: {
+      'line-color': colour.ink,
+      'line-width': ['interpolate', ['linear'], ['zoom'], 13, 0.3, 17, 0.9],
+    },
+  },
+];
+
+const proposalLayers: LayerSpecification[] = [
+  {
+    id: 'existing-blocks',
+    type: 'fill',
+    source: 'blocks',
+    filter: roleIs('existing'),
+    paint: { 'fill-color': colour.building },
+  },
+  {
+    id: 'removed-blocks',
+    type: 'fill',
+    source: 'blocks',
+    filter: roleIs('existing'),
+    paint: { 'fill-color': colour.sheet },
+  },
+  {
+    id: 'existing-blocks-outline',
+    type: 'line',
+    source: 'blocks',
+    filter: roleIs('existing'),
+    paint: { 'line-color': colour.ink, 'line-width': 0.9 },
+  },
+  {
+    id: 'removed-blocks-outline',
+    type: 'line',
+    source: 'blocks',
+    filter: roleIs('existing'),
+    paint: { 'line-color': colour.ink, 'line-width': 1, 'line-dasharray': [3, 2] },
+  },
+  {
+    id: 'proposal',
+    type: 'fill',
+    source: 'blocks',
+    filter: roleIs('proposed'),
+    paint: { 'fill-color': colour.sheet },
+  },
+  {
+    id: 'proposal-outline',
+    type: 'line',
+    source: 'blocks',
+    filter: roleIs('proposed'),
+    layout: { 'line-join': 'miter' },
+    paint: { 'line-color': colour.ink, 'line-width': 2 },
+  },
+  {
+    id: 'site',
+    type: 'line',
+    source: 'site',
+    paint: { 'line-color': colour.ink, 'line-width': 1.6, 'line-dasharray': chainDotted },
+  },
+];
+
+const receptorLayers: LayerSpecification[] = [
+  {
+    id: 'receptors-fill',
+    type: 'fill',
+    source: 'receptors',
+    paint: { 'fill-color': colour.sheet, 'fill-opacity': 0 },
+  },
+  {
+    id: 'receptors-not-met',
+    type: 'line',
+    source: 'receptors',
+    filter: ['==', ['get', 'finding'], 'not-met'],
+    paint: { 'line-color': colour.madder, 'line-width': 2 },
+  },
+  {
+    id: 'picked-parcels',
+    type: 'fill',
+    source: 'parcels',
+    'source-layer': 'parcels',
+    filter: false,
+    paint: { 'fill-color': colour.sunFill, 'fill-opacity': 0.3 },
+  },
+  {
+    id: 'picked-parcels-outline',
+    type: 'line',
+    source: 'parcels',
+    'source-layer': 'parcels',
+    filter: false,
+    paint: { 'line-color': colour.sunLine, 'line-width': 2.6 },
+  },
+  {
+    id: 'chosen-receptor',
+    type: 'line',
+    source: 'receptors',
+    filter: false,
+    layout: { 'line-join': 'miter' },
+    paint: { 'line-color': colour.sunLine, 'line-width': 3.2 },
+  },
+  {
+    id: 'not-met-cross',
+    type: 'symbol',
+    source: 'not-met',
+    layout: {
+      'icon-image': mapImages.cross,
+      'icon-size': ['interpolate', ['linear'], ['zoom'], 14, 0.6, 17, 1],
+      'icon-allow-overlap': true,
+    },
+  },
+];
+
+const halo = { 'text-color': colour.ink, 'text-halo-color': colour.sheet, 'text-halo-width': 1.4 };
+
+const labelLayers: LayerSpecification[] = [
+  {
+    id: 'house-numbers',
+    type: 'symbol',
+    source: 'parcels',
+    'source-layer': 'parcels',
+    minzoom: 16.8,
+    layout: {
+      'text-field': ['slice', ['get', 'address'], 0, ['index-of', ' ', ['get', 'address']]],
+      'text-font': font,
+      'text-size': 11,
+      'text-padding': 4,
+    },
+    paint: { ...halo, 'text-opacity': 0.85 },
+  },
+  {
+    id: 'open-space-names',
+    type: 'symbol',
+    source: 'open-space',
+    'source-layer': 'open-space',
+    minzoom: 14.5,
+    layout: { 'text-field': ['get', 'name'], 'text-font': font, 'text-size': 12 },
+    paint: halo,
+  },
+  {
+    id: 'water-names',
+    type: 'symbol',
+    source: 'water',
+    'source-layer': 'water',
+    layout: {
+      'text-field': ['get', 'name'],
+      'text-font': font,
+      'text-size': 13,
+      'text-letter-spacing': 0.12,
+    },
+    paint: halo,
+  },
+  {
+    id: 'street-names',
+    type: 'symbol',
+    source: 'street-lines',
+    'source-layer': 'street-lines',
+    minzoom: 14.5,
+    layout: {
+      'symbol-placement': 'line',
+      'text-field': ['get', 'name'],
+      'text-font': font,
+      'text-size': 12,
+      'text-letter-spacing': 0.04,
+      'symbol-spacing': 320,
+    },
+    paint: halo,
+  },
+  {
+    id: 'block-heights',
+    type: 'symbol',
+    source: 'block-labels',
+    minzoom: 15.5,
+    layout: {
+      'text-field': ['get', 'text'],
+      'text-font': font,
+      'text-size': 12,
+      'text-anchor': ['get', 'anchor'],
+      'text-offset': [
+        'match',
+        ['get', 'anchor'],
+        'top-left',
+        ['literal', [0.5, 0.4]],
+        'top-right',
+        ['literal', [-0.5, 0.4]],
+        'bottom-right',
+        ['literal', [-0.5, -0.4]],
+        ['literal', [0.5, -0.4]],
+      ],
+      'text-padding': 0,
+    },
+    paint: halo,
+  },
+  {
+    id: 'pins',
+    type: 'symbol',
+    source: 'pins',
+    layout: {
+      'icon-image': mapImages.pin,
+      'icon-anchor': 'bottom',
+      'icon-allow-overlap': true,
+      'icon-size': ['case', ['get', 'isChosen'], 1.25, 1],
+      'text-field': ['get', 'label'],
+      'text-font': font,
+      'text-size': 13,
+      'text-anchor': 'left',
+      'text-offset': [0.9, -1],
+      'text-max-width': 12,
+      'text-justify': 'left',
+      'text-optional': true,
+    },
+    paint: halo,
+  },
+];
+
+/** Where a click finds what lies under it, the topmost first. */
+export const pickLayers = {
+  pin: 'pins',
+  receptor: 'receptors-fill',
+  parcel: 'parcels-fill',
+} as const;
+
+/** The layers that depend on what of the instant is shown, and whether each is visible. */
+export function layerVisibility(layer: ShadowLayer): Record<string, boolean> {
+  const isBefore = layer === 'before';
+  const isAfter = layer === 'after';
+  return {
+    'shadow-before': isBefore,
+    'shadow-before-outline': isBefore,
+    'shadow-after': isAfter,
+    'shadow-after-outline': isAfter,
+    'shadow-net-new': !isBefore,
+    'shadow-net-new-outline': !isBefore,
+    'existing-blocks': isBefore,
+    'existing-blocks-outline': isBefore,
+    'removed-blocks': !isBefore,
+    'removed-blocks-outline': !isBefore,
+    proposal: !isBefore,
+    'proposal-outline': !isBefore,
+    'block-heights': !isBefore,
+  };
+}
+
+/** The filters that depend on what is chosen, by layer. */
+export function choiceFilters(
+  chosenReceptor: string | null,
+  pickedParcels: readonly string[],
+): Record<string, ExpressionSpecification> {
+  const picked: ExpressionSpecification = [
+    'in',
+    ['get', 'number'],
+    ['literal', [...pickedParcels]],
+  ];
+  return {
+    'chosen-receptor': ['==', ['get', 'id'], chosenReceptor ?? ''],
+    'picked-parcels': picked,
+    'picked-parcels-outline': picked,
+  };
+}
+
+/**
+ * The whole drawing: the base from the municipality's own tiles, everything else from the page.
+ *
+ * @param tilesUrl absolute, with `{layer}` in it; MapLibre fills in z, x and y
+ */
+export function buildMapStyle(tilesUrl: string): StyleSpecification {
+  const tileSource = (layer: TileLayer): SourceSpecification => ({
+    type: 'vector',
+    tiles: [tilesUrl.replace('{layer}', layer)],
+    minzoom: 10,
+    // A tile of zoom 16 resolves 0.1 m here; closer views stretch it.
+    maxzoom: 16,
+  });
+  const empty: SourceSpecification = {
+    type: 'geojson',
+    data: { type: 'FeatureCollection', features: [] },
+    // Shadows and footprints are drawn to the vertex, not simplified.
+    tolerance: 0,
+  };
+  return {
+    version: 8,
+    sources: {
+      ...Object.fromEntries(baseTiles.map((layer) => [layer, tileSource(layer)])),
+      ...Object.fromEntries(overlaySources.map((source) => [source, empty])),
+    },
+    layers: [
+      ...groundLayers,
+      ...shadowLayersOnMap,
+      ...lotLayers,
+      ...proposalLayers,
+      ...receptorLayers,
+      ...labelLayers,
+    ],
+  };
+}
