@@ -1,0 +1,39 @@
+import { randomUUID } from 'node:crypto';
+import type { IncomingMessage, ServerResponse } from 'node:http';
+import type { RequestHandler } from 'express';
+import type { Logger } from 'pino';
+import { pinoHttp } from 'pino-http';
+import { serializeError } from '../logger.ts';
+
+/**
+ * Gives every request an id and logs it without personal data: no bodies, no cookies, no addresses
+ * of machines, and no query strings, which may hold street or e-mail addresses.
+ */
+export function requestLog(logger: Logger): RequestHandler {
+  return pinoHttp({
+    logger,
+    genReqId: (_request: IncomingMessage, response: ServerResponse) => {
+      const id = randomUUID();
+      response.setHeader('X-Request-Id', id);
+      return id;
+    },
+    serializers: {
+      req: (request: { id: string; method: string; url: string }) => ({
+        id: request.id,
+        method: request.method,
+        path: request.url.split('?', 1)[0],
+      }),
+      res: (response: { statusCode: number }) => ({ status: response.statusCode }),
+      err: serializeError,
+    },
+    customLogLevel: (_request, response, error) => {
+      if (error !== undefined || response.statusCode >= 500) return 'error';
+      return response.statusCode >= 400 ? 'info' : 'debug';
+    },
+  });
+}
+
+/** The id under which this request stands in the log. */
+export function requestIdOf(request: IncomingMessage): string {
+  return String(request.id);
+}
