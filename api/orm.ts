@@ -6,7 +6,7 @@ import { entities } from './entities.ts';
 
 const migrationsFolder = path.join(import.meta.dirname, 'migrations');
 
-/** The name of the table in which connect-pg-simple keeps sessions; made by `api/cli/migrate.ts`. */
+/** The table in which connect-pg-simple keeps sessions; made by the first migration. */
 export const sessionTable = 'session';
 
 /** The schema of the job queue; made by `api/cli/migrate.ts`. */

@@ -8,7 +8,10 @@ const loopbackNames = ['localhost', '127.0.0.1', '[::1]'];
 export function originCheck(publicUrl: string): RequestHandler {
   const origins = new Set(ownOrigins(publicUrl));
   return (request, _response, next) => {
-    if (readingMethods.has(request.method)) return next();
+    if (readingMethods.has(request.method)) {
+      next();
+      return;
+    }
     const origin = request.get('origin');
     const isForeign =
       origin === undefined

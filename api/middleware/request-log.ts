@@ -35,5 +35,5 @@ export function requestLog(logger: Logger): RequestHandler {
 
 /** The id under which this request stands in the log. */
 export function requestIdOf(request: IncomingMessage): string {
-  return String(request.id);
+  return typeof request.id === 'string' ? request.id : '';
 }
