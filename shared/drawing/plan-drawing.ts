@@ -1,0 +1,330 @@
+import type { Polygonal } from '../geometry/geojson-schema.ts';
+import { createLocalPlane } from '../geometry/local-plane.ts';
+import type { FigureFormat } from './figure-format.ts';
+import { createFrame, extentOnPlane, type Frame, type SheetRing } from './frame.ts';
+import { hatchLines } from './hatch.ts';
+import { drawNorth, drawScaleBar } from './north-and-scale.ts';
+import { palette } from './palette.ts';
+import { closedPath, outlinePath, segmentsPath } from './path-data.ts';
+import { drawBlockHeights, drawKeys, drawNames, type NamedArea } from './plan-labels.ts';
+import { element, group, svgDocument, type Svg } from './svg.ts';
+import { drawTitleBlock, measureTitleBlock } from './title-block.ts';
+
+/** What a plan shows; longitude and latitude throughout. Parts that are not wanted are left empty. */
+export interface PlanContent {
+  streets: readonly NamedArea[];
+  water: readonly NamedArea[];
+  openSpace: readonly NamedArea[];
+  parcels: readonly Polygonal[];
+  /** What stands around the site. */
+  buildings: readonly Polygonal[];
+  /** The site's parcels. */
+  site: readonly Polygonal[];
+  /** What stands on the site and is removed by the proposal. */
+  removed: readonly Polygonal[];
+  proposal: readonly { geometry: Polygonal; topM: number }[];
+  /** The shadow that is there without the proposal, and the shadow that only the proposal casts. */
+  shadows: { standing: Polygonal; netNew: Polygonal } | null;
+  /** The receptor that the reader has picked. */
+  chosen: Polygonal | null;
+  /** Receptors that don't meet a clause, each with its mark in a list. */
+  notMet: readonly { geometry: Polygonal; mark: string }[];
+}
+
+export interface PlanOptions {
+  /** Centre of the local plane. */
+  origin: { longitude: number; latitude: number };
+  /** West, south, east, north in degrees. */
+  extent: readonly [number, number, number, number];
+  /** px on screen, points on paper; the height follows. */
+  width: number;
+  /** What the drawing shows, for people who cannot see it. */
+  label: string;
+  figures: FigureFormat;
+  /** `sheet`: names, heights, true north, scale bar, title block; `small`: the drawing alone, in finer lines. */
+  detail: 'sheet' | 'small';
+  /** Rows of the title block; empty for none. */
+  titleBlock: readonly (readonly [string, string])[];
+}
+
+/** A plan with nothing on it, to be filled. */
+export const emptyPlan: PlanContent = {
+  streets: [],
+  water: [],
+  openSpace: [],
+  parcels: [],
+  buildings: [],
+  site: [],
+  removed: [],
+  proposal: [],
+  shadows: null,
+  chosen: null,
+  notMet: [],
+};
+
+/**
+ * Draws a plan to scale, true north upward: the site, what stands around it, the shadow that is
+ * there already in plain slate blue, the net new shadow hatched in madder, and the proposal.
+ *
+ * @returns an SVG document; the same input gives the same text
+ */
+export function drawPlan(content: PlanContent, options: PlanOptions): string {
+  const plane = createLocalPlane(options.origin.longitude, options.origin.latitude);
+  const frame = createFrame(plane, extentOnPlane(options.extent, plane), options.width);
+  const pen = options.detail === 'sheet' ? sheetPen : smallPen;
+  const isSheet = options.detail === 'sheet';
+  const proposal = content.proposal.map(({ geometry, topM }) => ({
+    rings: frame.cutRings(geometry),
+    topM,
+  }));
+  const keys = content.notMet.map(({ geometry, mark }) => ({
+    rings: frame.cutRings(geometry),
+    mark,
+  }));
+
+  return svgDocument({ width: frame.width, height: frame.height }, options.label, [
+    element('rect', { width: frame.width, height: frame.height, fill: palette.paper }),
+    drawGround(content, frame, pen),
+    ...(content.shadows === null ? [] : [drawShadows(content.shadows, frame, pen)]),
+    areas('buildings', content.buildings, frame, {
+      fill: palette.building,
+      stroke: palette.buildingLine,
+      'stroke-width': pen.building,
+    }),
+    areas('removed', content.removed, frame, {
+      fill: 'none',
+      stroke: palette.ink,
+      'stroke-width': pen.building,
+      'stroke-dasharray': '2 2',
+    }),
+    outline('site', content.site, frame, {
+      'stroke-width': pen.site,
+      'stroke-dasharray': pen.siteDashes,
+    }),
+    ...proposal.map(({ rings }) =>
+      element('path', {
+        'data-part': 'proposal',
+        d: closedPath(rings),
+        'fill-rule': 'evenodd',
+        fill: palette.paper,
+        stroke: palette.ink,
+        'stroke-width': pen.proposal,
+      }),
+    ),
+    ...keys.map(({ rings }) =>
+      element('path', {
+        'data-part': 'not-met',
+        d: outlinePath(rings, frame),
+        fill: 'none',
+        stroke: palette.madder,
+        'stroke-width': pen.receptor,
+      }),
+    ),
+    ...(content.chosen === null
+      ? []
+      : [
+          outline('chosen', [content.chosen], frame, {
+            stroke: palette.sunLine,
+            'stroke-width': 2.4,
+          }),
+        ]),
+    ...(isSheet ? drawSheetText(content, frame, proposal, keys, options) : []),
+    element('rect', {
+      width: frame.width,
+      height: frame.height,
+      fill: 'none',
+      stroke: palette.ink,
+      'stroke-width': pen.frame,
+    }),
+  ]);
+}
+
+interface Pen {
+  parcel: number;
+  building: number;
+  shadowLine: number;
+  hatch: number;
+  hatchSpacing: number;
+  site: number;
+  siteDashes: string;
+  proposal: number;
+  receptor: number;
+  frame: number;
+}
+
+const sheetPen: Pen = {
+  parcel: 0.5,
+  building: 0.7,
+  shadowLine: 1,
+  hatch: 1.1,
+  hatchSpacing: 5,
+  site: 1.5,
+  siteDashes: '10 3 2 3',
+  proposal: 2,
+  receptor: 1.6,
+  frame: 1.6,
+};
+
+const smallPen: Pen = {
+  parcel: 0.25,
+  building: 0.3,
+  shadowLine: 0.4,
+  hatch: 0.55,
+  hatchSpacing: 2.4,
+  site: 0.8,
+  siteDashes: '4 1.2 0.8 1.2',
+  proposal: 0.9,
+  receptor: 0.8,
+  frame: 0.8,
+};
+
+function drawGround(content: PlanContent, frame: Frame, pen: Pen): Svg {
+  const water = content.water.flatMap(({ geometry }) => frame.cutRings(geometry));
+  return group({ 'data-part': 'ground' }, [
+    areas('streets', content.streets.map(geometryOf), frame, { fill: palette.street }),
+    // Water is ruled, because colour is kept for sun and shade.
+    element('path', {
+      'data-part': 'water',
+      d: segmentsPath(hatchLines(water, pen.hatchSpacing * 0.9, 0)),
+      fill: 'none',
+      stroke: palette.hairline,
+      'stroke-width': pen.parcel,
+    }),
+    element('path', {
+      d: outlinePath(water, frame),
+      fill: 'none',
+      stroke: palette.buildingLine,
+      'stroke-width': pen.building,
+    }),
+    outline('open-space', content.openSpace.map(geometryOf), frame, {
+      stroke: palette.buildingLine,
+      'stroke-width': pen.building,
+      'stroke-dasharray': '1 2',
+    }),
+    outline('parcels', content.parcels, frame, {
+      stroke: palette.hairline,
+      'stroke-width': pen.parcel,
+    }),
+  ]);
+}
+
+function drawShadows(
+  shadows: { standing: Polygonal; netNew: Polygonal },
+  frame: Frame,
+  pen: Pen,
+): Svg {
+  const standing = frame.cutRings(shadows.standing);
+  const netNew = frame.cutRings(shadows.netNew);
+  return group({ 'data-part': 'shadows' }, [
+    element('path', {
+      'data-part': 'standing-shadow',
+      d: closedPath(standing),
+      'fill-rule': 'evenodd',
+      fill: palette.shadow,
+      'fill-opacity': 0.35,
+    }),
+    element('path', {
+      d: outlinePath(standing, frame),
+      fill: 'none',
+      stroke: palette.shadow,
+      'stroke-width': pen.shadowLine,
+    }),
+    element('path', {
+      'data-part': 'net-new-shadow',
+      d: closedPath(netNew),
+      'fill-rule': 'evenodd',
+      fill: palette.madder,
+      'fill-opacity': 0.1,
+    }),
+    element('path', {
+      'data-part': 'net-new-hatch',
+      d: segmentsPath(hatchLines(netNew, pen.hatchSpacing, 45)),
+      fill: 'none',
+      stroke: palette.madder,
+      'stroke-width': pen.hatch,
+    }),
+    element('path', {
+      d: outlinePath(netNew, frame),
+      fill: 'none',
+      stroke: palette.madder,
+      'stroke-width': pen.shadowLine * 0.8,
+    }),
+  ]);
+}
+
+function drawSheetText(
+  content: PlanContent,
+  frame: Frame,
+  proposal: { rings: SheetRing[]; topM: number }[],
+  keys: { rings: SheetRing[]; mark: string }[],
+  options: PlanOptions,
+): Svg[] {
+  const fontSize = 8.5;
+  const margin = 10;
+  const block = measureTitleBlock(options.titleBlock, fontSize);
+  const blockBox = {
+    x: frame.width - margin - block.width,
+    y: frame.height - margin - block.height,
+    width: block.width,
+    height: block.height,
+  };
+  const northBox = { x: 0, y: frame.height - 74, width: 190, height: 74 };
+  const taken = [northBox, ...(options.titleBlock.length === 0 ? [] : [blockBox])];
+  const heights = drawBlockHeights(proposal, frame, options.figures, taken);
+  const marks = drawKeys(keys, frame, [...taken, ...heights.boxes]);
+  const names = drawNames(content, frame, [...taken, ...heights.boxes, ...marks.boxes]);
+  return [
+    ...names.drawn,
+    ...marks.drawn,
+    ...heights.drawn,
+    element('rect', {
+      x: margin - 4,
+      y: frame.height - 70,
+      width: 176,
+      height: 64,
+      fill: palette.paper,
+      'fill-opacity': 0.85,
+    }),
+    drawNorth([margin + 22, frame.height - 16], 34, fontSize),
+    drawScaleBar([margin + 58, frame.height - 20], frame.pxPerM, 100, fontSize, options.figures),
+    ...(options.titleBlock.length === 0
+      ? []
+      : [drawTitleBlock(options.titleBlock, [blockBox.x, blockBox.y], fontSize)]),
+  ];
+}
+
+function areas(
+  part: string,
+  geometries: readonly Polygonal[],
+  frame: Frame,
+  look: Record<string, string | number>,
+): Svg {
+  return element('path', {
+    'data-part': part,
+    d: closedPath(geometries.flatMap((geometry) => frame.cutRings(geometry))),
+    'fill-rule': 'evenodd',
+    ...look,
+  });
+}
+
+function outline(
+  part: string,
+  geometries: readonly Polygonal[],
+  frame: Frame,
+  look: Record<string, string | number>,
+): Svg {
+  return element('path', {
+    'data-part': part,
+    d: outlinePath(
+      geometries.flatMap((geometry) => frame.cutRings(geometry)),
+      frame,
+    ),
+    fill: 'none',
+    stroke: palette.ink,
+    ...look,
+  });
+}
+
+function geometryOf(area: NamedArea): Polygonal {
+  return area.geometry;
+}
