@@ -13,7 +13,8 @@ export interface ArcSteps {
   originMs: number;
 }
 
-const hourMs = 3_600_000;
+const minuteMs = 60_000;
+const hourMs = 60 * minuteMs;
 
 /** The steps of a day, or null where the sun stays down. */
 export function listArcSteps(
@@ -31,8 +32,9 @@ export function listArcSteps(
   return {
     firstMs,
     lastMs,
-    homeMs: window === null ? firstMs : clamp(window.fromMs),
-    endMs: window === null ? lastMs : clamp(window.toMs),
+    // Whole minutes inside the window: a window by the sun has ends to the second, an address has not.
+    homeMs: window === null ? firstMs : clamp(Math.ceil(window.fromMs / minuteMs) * minuteMs),
+    endMs: window === null ? lastMs : clamp(Math.floor(window.toMs / minuteMs) * minuteMs),
     stepMs,
     originMs: day.startMs,
   };
