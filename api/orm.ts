@@ -26,6 +26,7 @@ export function ormOptions(clientUrl: string): Options {
       emit: 'ts',
       // Without a name the snapshot is called after the database and differs on each machine.
       snapshotName: '.snapshot-noonmark',
+      silent: true,
     },
     schemaGenerator: {
       ignoreSchema: [queueSchema, 'tiger', 'tiger_data', 'topology'],
@@ -36,5 +37,7 @@ export function ormOptions(clientUrl: string): Options {
 
 /** Opens the database; the caller closes it. */
 export async function createOrm(clientUrl: string): Promise<MikroORM> {
-  return MikroORM.init(ormOptions(clientUrl));
+  const options = ormOptions(clientUrl);
+  // The snapshot is for writing migrations; applying them must not touch the source tree.
+  return MikroORM.init({ ...options, migrations: { ...options.migrations, snapshot: false } });
 }
