@@ -1,12 +1,10 @@
 import { z } from 'zod';
 import { polygonalSchema } from '../geometry/geojson-schema.ts';
+import { massingFiguresSchema } from '../massing/massing-figures.ts';
 import { massingIssueSchema } from '../massing/massing-issue.ts';
 
-export const massingLimits = {
-  fileBytes: 25 * 1024 * 1024,
-  vertices: 20_000,
-  topM: 1000,
-} as const;
+export { massingFiguresSchema, type MassingFigures } from '../massing/massing-figures.ts';
+export { massingLimits } from '../massing/massing-limits.ts';
 
 export const massingBlockFeatureSchema = z.object({
   type: z.literal('Feature'),
@@ -20,16 +18,6 @@ export const massingBlockFeatureSchema = z.object({
   }),
   geometry: polygonalSchema,
 });
-
-export const massingFiguresSchema = z.object({
-  proposedBlocks: z.int(),
-  existingBlocks: z.int(),
-  heightM: z.number().nullable(),
-  storeys: z.int().nullable(),
-  footprintM2: z.number(),
-  volumeM3: z.number(),
-});
-export type MassingFigures = z.infer<typeof massingFiguresSchema>;
 
 export const massingSummarySchema = z.object({
   revision: z.int(),
@@ -56,6 +44,12 @@ export type MassingDetail = z.infer<typeof massingDetailSchema>;
 
 export const massingListSchema = z.object({ rows: z.array(massingSummarySchema) });
 
+const comparedBlockSchema = z.object({
+  baseM: z.number(),
+  topM: z.number(),
+  footprintM2: z.number().nullable(),
+});
+
 /** What changed from one revision to another, block by block. */
 export const massingComparisonSchema = z.object({
   from: z.int(),
@@ -64,8 +58,8 @@ export const massingComparisonSchema = z.object({
     z.object({
       id: z.string(),
       change: z.enum(['added', 'removed', 'changed', 'same']),
-      before: z.object({ baseM: z.number(), topM: z.number(), footprintM2: z.number() }).nullable(),
-      after: z.object({ baseM: z.number(), topM: z.number(), footprintM2: z.number() }).nullable(),
+      before: comparedBlockSchema.nullable(),
+      after: comparedBlockSchema.nullable(),
     }),
   ),
   figuresBefore: massingFiguresSchema,
