@@ -27,9 +27,9 @@ export function chooseMapExtent(
   const middleLatitude = (south + north) / 2;
   const metresPerDegreeEast = METRES_PER_DEGREE * Math.cos((middleLatitude * Math.PI) / 180);
 
-  const reachM = Math.min(Math.max(heightM * 3.5, 100), 300);
+  const reachM = Math.min(Math.max(heightM * 4, 120), 320);
   const polewardM = reachM;
-  const equatorwardM = reachM * 0.35;
+  const equatorwardM = reachM * 0.15;
   const heightOfSheetM = (north - south) * METRES_PER_DEGREE + polewardM + equatorwardM;
   const widthOfSheetM = Math.max(
     (east - west) * metresPerDegreeEast + reachM,

@@ -17,6 +17,14 @@ import { digestSchema, studyFindingsSchema } from '../../../shared/study/evidenc
 
 const instantSchema = z.iso.datetime({ offset: true });
 
+const lineSchema = z.discriminatedUnion('type', [
+  z.strictObject({ type: z.literal('LineString'), coordinates: z.array(lngLatSchema).min(2) }),
+  z.strictObject({
+    type: z.literal('MultiLineString'),
+    coordinates: z.array(z.array(lngLatSchema).min(2)),
+  }),
+]);
+
 /** What the maps show around the site; geometry that touches the map extent, whole or cut. */
 const surroundingsSchema = z.object({
   buildings: z.array(
@@ -30,6 +38,8 @@ const surroundingsSchema = z.object({
   ),
   parcels: z.array(z.object({ number: z.string(), geometry: polygonalSchema })),
   streets: z.array(z.object({ name: z.string(), geometry: polygonalSchema })),
+  /** Middle lines, along which the names are written. */
+  streetLines: z.array(z.object({ name: z.string(), geometry: lineSchema })),
   water: z.array(z.object({ name: z.string(), geometry: polygonalSchema })),
   openSpace: z.array(z.object({ name: z.string(), geometry: polygonalSchema })),
 });
@@ -81,6 +91,8 @@ export const reportPayloadSchema = z.object({
     applicantName: z.string(),
   }),
   siteParcels: z.array(parcelSchema).min(1),
+  /** The site's parcels, dissolved, as the study has it. */
+  site: polygonalSchema,
   revision: z.object({
     revision: z.int(),
     fileName: z.string(),
