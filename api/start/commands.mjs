@@ -49,15 +49,15 @@ export async function runCommand(lifetime, command, args, options = {}) {
  * @param {Lifetime} lifetime
  * @param {string} command
  * @param {string[]} args
- * @param {{ cwd: string, env: NodeJS.ProcessEnv }} options
- * @returns {Promise<number>} its exit code; 1 when a signal has ended it
+ * @param {{ cwd: string, env: NodeJS.ProcessEnv, longestMs?: number }} options
+ * @returns {Promise<number>} its exit code; 1 when a signal, or the time that it may take, has ended it
  */
-export async function showCommand(lifetime, command, args, options) {
-  const child = startChild(lifetime, command, args, {
-    ...options,
-    stdio: ['ignore', 'inherit', 'inherit'],
-  });
+export async function showCommand(lifetime, command, args, { cwd, env, longestMs = Infinity }) {
+  const stdio = /** @type {const} */ (['ignore', 'inherit', 'inherit']);
+  const child = startChild(lifetime, command, args, { cwd, env, stdio: [...stdio] });
+  const timer = longestMs < Infinity ? setTimeout(() => void child.stop(), longestMs) : undefined;
   const { code } = await child.ended;
+  clearTimeout(timer);
   lifetime.checkpoint();
   return code ?? 1;
 }

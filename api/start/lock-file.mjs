@@ -11,7 +11,7 @@ import { Problem, errorCode } from './problem.mjs';
  * @property {number} pid
  * @property {string} startedAtTicks of the process, so that a process id used anew isn't taken for it
  * @property {string} program such as `npm start`
- * @property {string} localUrl
+ * @property {string} localUrl where it serves; empty for tests
  * @property {string} publicUrl
  */
 
@@ -30,8 +30,8 @@ export function lockDataFolder(lifetime, dataFolder, description) {
   if (state.state === 'taken') {
     const { program, pid, localUrl } = state.owner;
     throw new Problem(
-      `${program} is already running with this data folder (process ${pid}, ${localUrl}). ` +
-        `Stop it first: kill ${pid}`,
+      `${program} is already running with the data folder ${dataFolder} ` +
+        `(process ${pid}${localUrl && `, ${localUrl}`}). Stop it first: kill ${pid}`,
     );
   }
   if (state.state === 'stale') rmSync(file, { force: true });
