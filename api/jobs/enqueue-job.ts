@@ -1,4 +1,4 @@
-import type { EntityManager, Knex } from '@mikro-orm/postgresql';
+import type { EntityManager } from '@mikro-orm/postgresql';
 import type PgBoss from 'pg-boss';
 import type { JobDefinition } from './job-definitions.ts';
 
@@ -12,24 +12,23 @@ export async function enqueueJob<Payload extends object>(
   definition: JobDefinition<Payload>,
   payload: Payload,
 ): Promise<void> {
-  const transaction = em.getTransactionContext<Knex.Transaction>();
-  if (transaction === undefined) throw new Error('A job is enqueued inside a transaction.');
+  if (!em.isInTransaction()) throw new Error('A job is enqueued inside a transaction.');
   const id = await queue.send(definition.id, definition.payload.parse(payload), {
-    db: { executeSql: (text, values) => execute(transaction, text, values) },
+    db: { executeSql: (text, values) => execute(em, text, values) },
   });
   if (id === null) throw new Error(`The queue took no job ${definition.id}.`);
 }
 
-/** Runs a statement with the placeholders $1, $2 … on a transaction that writes them as question marks. */
+/** Runs a statement with the placeholders $1, $2 … by way of the ORM, which writes them as question marks. */
 async function execute(
-  transaction: Knex.Transaction,
+  em: EntityManager,
   text: string,
   values: unknown[],
-): Promise<{ rows: { id: string }[] }> {
-  const bindings: Knex.Value[] = [];
+): Promise<{ rows: unknown[] }> {
+  const ordered: unknown[] = [];
   const sql = text.replace(/\?/g, '\\?').replace(/\$(\d+)/g, (_, position: string) => {
-    bindings.push((values[Number(position) - 1] ?? null) as Knex.Value);
+    ordered.push(values[Number(position) - 1] ?? null);
     return '?';
   });
-  return transaction.raw<{ rows: { id: string }[] }>(sql, bindings);
+  return { rows: await em.execute<unknown[]>(sql, ordered) };
 }
