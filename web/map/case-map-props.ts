@@ -2,8 +2,8 @@ import type { ReactNode } from 'react';
 import type { InstantShadows } from '../../shared/contracts/studies.ts';
 import type { LngLat, Polygonal } from '../../shared/geometry/geojson-schema.ts';
 import type { Camera } from './camera-in-url.ts';
+import type { ShadowLayer } from './case-layers.ts';
 import type { Bounds, MapBlock, MapPin, MapReceptor } from './map-features.ts';
-import type { ShadowLayer } from './map-layers.ts';
 
 /** What lies under the place that a person pointed at. */
 export interface MapPick {

@@ -4,6 +4,7 @@ import workerUrl from 'maplibre-gl/dist/maplibre-gl-worker.mjs?worker&url';
 import { useEffect, useEffectEvent, useRef, useState } from 'react';
 import { useFormats } from '../lib/place-context.ts';
 import { formatCamera, type Camera } from './camera-in-url.ts';
+import { choiceFilters, layerVisibility, pickLayers, type OverlaySource } from './case-layers.ts';
 import type { CaseMapProps, MapPick } from './case-map-props.ts';
 import {
   blockFeatures,
@@ -14,14 +15,8 @@ import {
   receptorFeatures,
 } from './map-features.ts';
 import { drawMapImages, imagePixelRatio } from './map-images.ts';
-import {
-  buildMapStyle,
-  choiceFilters,
-  layerVisibility,
-  pickLayers,
-  type OverlaySource,
-} from './map-layers.ts';
 import { metresPerPixel } from './map-scale.ts';
+import { buildMapStyle } from './map-style.ts';
 import { NorthAndScale } from './north-and-scale.tsx';
 
 maplibregl.setWorkerUrl(workerUrl);

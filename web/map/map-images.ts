@@ -1,4 +1,4 @@
-import { mapImages } from './map-layers.ts';
+import { mapImages } from './case-layers.ts';
 import { mapPalette as colour } from './map-palette.ts';
 
 /** Device pixels per CSS pixel at which the images are drawn. */

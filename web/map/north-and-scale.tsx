@@ -1,5 +1,5 @@
+import { roundScaleLength } from '../../shared/drawing/north-and-scale.ts';
 import { useFormats } from '../lib/place-context.ts';
-import { roundBarLength } from './map-scale.ts';
 
 export interface NorthAndScaleProps {
   /** Metres of ground to one CSS pixel. */
@@ -11,7 +11,7 @@ const barWidthPx = 110;
 /** True north and a scale bar, as on every plan. North is up: the map does not turn. */
 export function NorthAndScale({ metresToPixel }: NorthAndScaleProps) {
   const { number } = useFormats();
-  const lengthM = roundBarLength(metresToPixel, barWidthPx);
+  const lengthM = roundScaleLength(metresToPixel * barWidthPx);
   const lengthPx = lengthM / metresToPixel;
   const label = lengthM >= 1000 ? `${number(lengthM / 1000)} km` : `${number(lengthM)} m`;
   return (

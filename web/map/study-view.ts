@@ -1,5 +1,5 @@
 import { civilClockToMs, civilDateOf } from '../../shared/solar/civil-time.ts';
-import { shadowLayers, type ShadowLayer } from './map-layers.ts';
+import { shadowLayers, type ShadowLayer } from './case-layers.ts';
 
 /** What of a study is looked at; it stands in the address, so that a colleague sees the same. */
 export interface StudyView {

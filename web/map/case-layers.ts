@@ -1,10 +1,5 @@
-import type {
-  ExpressionSpecification,
-  LayerSpecification,
-  SourceSpecification,
-  StyleSpecification,
-} from 'maplibre-gl';
-import { type TileLayer } from '../../shared/contracts/base-data.ts';
+import type { ExpressionSpecification, LayerSpecification } from 'maplibre-gl';
+import { inkOnPaper, mapFont } from './base-layers.ts';
 import { mapPalette as colour } from './map-palette.ts';
 
 /** What is drawn of an instant: what is shaded now, what will be, or what is shaded only then. */
@@ -26,56 +21,13 @@ export type OverlaySource = (typeof overlaySources)[number];
 /** Images that `map-images.ts` draws. */
 export const mapImages = { hatch: 'net-new-hatch', cross: 'not-met-cross', pin: 'pin' } as const;
 
-const baseTiles: readonly TileLayer[] = [
-  'open-space',
-  'water',
-  'streets',
-  'street-lines',
-  'parcels',
-  'buildings',
-];
-const font = ['Public Sans'];
-
 /** A chain-dotted line: long dash, gap, dot, gap, in widths of the line. */
 const chainDotted = [7, 2, 1, 2];
 
 const kindIs = (kind: string): ExpressionSpecification => ['==', ['get', 'kind'], kind];
 const roleIs = (role: string): ExpressionSpecification => ['==', ['get', 'role'], role];
 
-/** Paper, water, streets, open space, under the shadows. */
-const groundLayers: LayerSpecification[] = [
-  { id: 'paper', type: 'background', paint: { 'background-color': colour.sheet } },
-  {
-    id: 'open-space',
-    type: 'fill',
-    source: 'open-space',
-    'source-layer': 'open-space',
-    paint: { 'fill-color': colour.openSpace },
-  },
-  {
-    id: 'water',
-    type: 'fill',
-    source: 'water',
-    'source-layer': 'water',
-    paint: { 'fill-color': colour.water },
-  },
-  {
-    id: 'water-shore',
-    type: 'line',
-    source: 'water',
-    'source-layer': 'water',
-    paint: { 'line-color': colour.ink, 'line-opacity': 0.35, 'line-width': 0.8 },
-  },
-  {
-    id: 'streets',
-    type: 'fill',
-    source: 'streets',
-    'source-layer': 'streets',
-    paint: { 'fill-color': colour.street },
-  },
-];
-
-const shadowLayersOnMap: LayerSpecification[] = [
+export const shadowFillLayers: LayerSpecification[] = [
   ...(['before', 'after'] as const).flatMap((kind): LayerSpecification[] => [
     {
       id: `shadow-${kind}`,
@@ -108,49 +60,7 @@ const shadowLayersOnMap: LayerSpecification[] = [
   },
 ];
 
-/** Lot lines and buildings, over the shadows as in a plan. */
-const lotLayers: LayerSpecification[] = [
-  // Invisible, but the pointer finds the parcel under it here.
-  {
-    id: 'parcels-fill',
-    type: 'fill',
-    source: 'parcels',
-    'source-layer': 'parcels',
-    minzoom: 14,
-    paint: { 'fill-color': colour.sheet, 'fill-opacity': 0 },
-  },
-  {
-    id: 'parcels',
-    type: 'line',
-    source: 'parcels',
-    'source-layer': 'parcels',
-    minzoom: 14,
-    paint: {
-      'line-color': colour.ink,
-      'line-opacity': ['interpolate', ['linear'], ['zoom'], 14, 0.12, 17, 0.3],
-      'line-width': 0.8,
-    },
-  },
-  {
-    id: 'buildings',
-    type: 'fill',
-    source: 'buildings',
-    'source-layer': 'buildings',
-    paint: { 'fill-color': colour.building },
-  },
-  {
-    id: 'buildings-outline',
-    type: 'line',
-    source: 'buildings',
-    'source-layer': 'buildings',
-    paint: {
-      'line-color': colour.ink,
-      'line-width': ['interpolate', ['linear'], ['zoom'], 13, 0.3, 17, 0.9],
-    },
-  },
-];
-
-const proposalLayers: LayerSpecification[] = [
+export const proposalLayers: LayerSpecification[] = [
   {
     id: 'existing-blocks',
     type: 'fill',
@@ -202,7 +112,7 @@ const proposalLayers: LayerSpecification[] = [
   },
 ];
 
-const receptorLayers: LayerSpecification[] = [
+export const receptorLayers: LayerSpecification[] = [
   {
     id: 'receptors-fill',
     type: 'fill',
@@ -252,61 +162,8 @@ const receptorLayers: LayerSpecification[] = [
   },
 ];
 
-const halo = { 'text-color': colour.ink, 'text-halo-color': colour.sheet, 'text-halo-width': 1.4 };
-
-const labelLayers: LayerSpecification[] = [
-  {
-    id: 'house-numbers',
-    type: 'symbol',
-    source: 'parcels',
-    'source-layer': 'parcels',
-    minzoom: 16.8,
-    layout: {
-      'text-field': ['slice', ['get', 'address'], 0, ['index-of', ' ', ['get', 'address']]],
-      'text-font': font,
-      'text-size': 11,
-      'text-padding': 4,
-    },
-    paint: { ...halo, 'text-opacity': 0.85 },
-  },
-  {
-    id: 'open-space-names',
-    type: 'symbol',
-    source: 'open-space',
-    'source-layer': 'open-space',
-    minzoom: 14.5,
-    layout: { 'text-field': ['get', 'name'], 'text-font': font, 'text-size': 12 },
-    paint: halo,
-  },
-  {
-    id: 'water-names',
-    type: 'symbol',
-    source: 'water',
-    'source-layer': 'water',
-    layout: {
-      'text-field': ['get', 'name'],
-      'text-font': font,
-      'text-size': 13,
-      'text-letter-spacing': 0.12,
-    },
-    paint: halo,
-  },
-  {
-    id: 'street-names',
-    type: 'symbol',
-    source: 'street-lines',
-    'source-layer': 'street-lines',
-    minzoom: 14.5,
-    layout: {
-      'symbol-placement': 'line',
-      'text-field': ['get', 'name'],
-      'text-font': font,
-      'text-size': 12,
-      'text-letter-spacing': 0.04,
-      'symbol-spacing': 320,
-    },
-    paint: halo,
-  },
+/** Heights of the blocks, and pins. */
+export const markLayers: LayerSpecification[] = [
   {
     id: 'block-heights',
     type: 'symbol',
@@ -314,7 +171,7 @@ const labelLayers: LayerSpecification[] = [
     minzoom: 15.5,
     layout: {
       'text-field': ['get', 'text'],
-      'text-font': font,
+      'text-font': mapFont,
       'text-size': 12,
       'text-anchor': ['get', 'anchor'],
       'text-offset': [
@@ -330,7 +187,7 @@ const labelLayers: LayerSpecification[] = [
       ],
       'text-padding': 0,
     },
-    paint: halo,
+    paint: inkOnPaper,
   },
   {
     id: 'pins',
@@ -342,7 +199,7 @@ const labelLayers: LayerSpecification[] = [
       'icon-allow-overlap': true,
       'icon-size': ['case', ['get', 'isChosen'], 1.25, 1],
       'text-field': ['get', 'label'],
-      'text-font': font,
+      'text-font': mapFont,
       'text-size': 13,
       'text-anchor': 'left',
       'text-offset': [0.9, -1],
@@ -350,7 +207,7 @@ const labelLayers: LayerSpecification[] = [
       'text-justify': 'left',
       'text-optional': true,
     },
-    paint: halo,
+    paint: inkOnPaper,
   },
 ];
 
@@ -396,41 +253,5 @@ export function choiceFilters(
     'chosen-receptor': ['==', ['get', 'id'], chosenReceptor ?? ''],
     'picked-parcels': picked,
     'picked-parcels-outline': picked,
-  };
-}
-
-/**
- * The whole drawing: the base from the municipality's own tiles, everything else from the page.
- *
- * @param tilesUrl absolute, with `{layer}` in it; MapLibre fills in z, x and y
- */
-export function buildMapStyle(tilesUrl: string): StyleSpecification {
-  const tileSource = (layer: TileLayer): SourceSpecification => ({
-    type: 'vector',
-    tiles: [tilesUrl.replace('{layer}', layer)],
-    minzoom: 10,
-    // A tile of zoom 16 resolves 0.1 m here; closer views stretch it.
-    maxzoom: 16,
-  });
-  const empty: SourceSpecification = {
-    type: 'geojson',
-    data: { type: 'FeatureCollection', features: [] },
-    // Shadows and footprints are drawn to the vertex, not simplified.
-    tolerance: 0,
-  };
-  return {
-    version: 8,
-    sources: {
-      ...Object.fromEntries(baseTiles.map((layer) => [layer, tileSource(layer)])),
-      ...Object.fromEntries(overlaySources.map((source) => [source, empty])),
-    },
-    layers: [
-      ...groundLayers,
-      ...shadowLayersOnMap,
-      ...lotLayers,
-      ...proposalLayers,
-      ...receptorLayers,
-      ...labelLayers,
-    ],
   };
 }

@@ -1,0 +1,56 @@
+import type { SourceSpecification, StyleSpecification } from 'maplibre-gl';
+import { type TileLayer } from '../../shared/contracts/base-data.ts';
+import { groundLayers, lotLayers, nameLayers } from './base-layers.ts';
+import {
+  markLayers,
+  overlaySources,
+  proposalLayers,
+  receptorLayers,
+  shadowFillLayers,
+} from './case-layers.ts';
+
+const baseTiles: readonly TileLayer[] = [
+  'open-space',
+  'water',
+  'streets',
+  'street-lines',
+  'parcels',
+  'buildings',
+];
+
+/**
+ * The whole drawing: the base from the municipality's own tiles, everything else from the page.
+ *
+ * @param tilesUrl absolute, with `{layer}` in it; MapLibre fills in z, x and y
+ */
+export function buildMapStyle(tilesUrl: string): StyleSpecification {
+  const tileSource = (layer: TileLayer): SourceSpecification => ({
+    type: 'vector',
+    tiles: [tilesUrl.replace('{layer}', layer)],
+    minzoom: 10,
+    // A tile of zoom 16 resolves 0.1 m here; closer views stretch it.
+    maxzoom: 16,
+  });
+  const empty: SourceSpecification = {
+    type: 'geojson',
+    data: { type: 'FeatureCollection', features: [] },
+    // Shadows and footprints are drawn to the vertex, not simplified.
+    tolerance: 0,
+  };
+  return {
+    version: 8,
+    sources: {
+      ...Object.fromEntries(baseTiles.map((layer) => [layer, tileSource(layer)])),
+      ...Object.fromEntries(overlaySources.map((source) => [source, empty])),
+    },
+    layers: [
+      ...groundLayers,
+      ...shadowFillLayers,
+      ...lotLayers,
+      ...proposalLayers,
+      ...receptorLayers,
+      ...nameLayers,
+      ...markLayers,
+    ],
+  };
+}
