@@ -1,5 +1,15 @@
 import type { Endpoint } from './endpoint.ts';
+import { baseDataEndpoints } from './modules/base-data/base-data.routes.ts';
+import { peopleEndpoints } from './modules/people/people.routes.ts';
+import { rulesEndpoints } from './modules/rules/rules.routes.ts';
 import { healthEndpoints } from './modules/settings/health.routes.ts';
+import { municipalityEndpoints } from './modules/settings/municipality.routes.ts';
 
 /** Every endpoint of the API: the routes and the API's document are made from this list. */
-export const endpoints: readonly Endpoint[] = [...healthEndpoints];
+export const endpoints: readonly Endpoint[] = [
+  ...healthEndpoints,
+  ...peopleEndpoints,
+  ...municipalityEndpoints,
+  ...baseDataEndpoints,
+  ...rulesEndpoints,
+];

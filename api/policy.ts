@@ -104,9 +104,9 @@ export function transitionsOnCase(actor: Actor | null, facts: CaseFacts): CaseTr
   return caseTransitions.filter((transition) => mayTransition(actor, transition, facts));
 }
 
-/** Whether this person may write a new version of the municipality's rule. */
-export function mayWriteRules(actor: Actor | null): boolean {
-  return actor?.role === 'administrator';
+/** Whether this person may read a version of the rule that is not in force yet. */
+export function mayReadRuleDrafts(actor: Actor | null): boolean {
+  return actor?.role === 'administrator' || actor?.role === 'planner';
 }
 
 function partiesOf(actor: Actor | null, facts: CaseFacts): Party[] {

@@ -17,6 +17,7 @@ export type SignInInput = z.infer<typeof signInInputSchema>;
 /** Setting the first administrator's password by the one-time link. */
 export const acceptInvitationInputSchema = z.strictObject({
   token: z.string().min(20).max(200),
+  email: emailSchema,
   name: z.string().trim().min(1, 'Write your name.').max(120),
   password: z.string().min(12, 'Use at least 12 characters.').max(200),
 });

@@ -12,3 +12,11 @@ export const ruleVersionSchema = z.object({
 export type RuleVersion = z.infer<typeof ruleVersionSchema>;
 
 export const ruleVersionListSchema = z.object({ rows: z.array(ruleVersionSchema) });
+
+export const createRuleVersionInputSchema = z.strictObject({
+  /** Complete, with the number of the next version. */
+  rule: ruleSchema,
+  /** The civil day from which it holds; null keeps it a draft. */
+  inForceFrom: z.iso.date().nullable(),
+});
+export type CreateRuleVersionInput = z.output<typeof createRuleVersionInputSchema>;
