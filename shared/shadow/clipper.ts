@@ -1,5 +1,5 @@
-import createModule from 'clipper2-wasm/dist/es/clipper2z.js';
 import type { MainModule } from 'clipper2-wasm/dist/clipper2z';
+import createModule from 'clipper2-wasm/dist/es/clipper2z.js';
 
 /** The polygon library Clipper2, compiled to WebAssembly. */
 export type Clipper = MainModule;

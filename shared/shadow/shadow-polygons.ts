@@ -31,10 +31,9 @@ export function drawShadowPolygons(clipper: Clipper, layer: ShadowLayer): Shadow
   const existing = contoursOf(layer.shadows, 'existing');
   const proposed = layer.shadows.filter(({ role }) => role === 'proposed');
   const proposedContours = proposed.flatMap(({ contours }) => contours);
-  const reach = proposed.map(({ box }) => box).reduce<Box | null>(
-    (joined, box) => (joined === null ? box : joinBoxes(joined, box)),
-    null,
-  );
+  const reach = proposed
+    .map(({ box }) => box)
+    .reduce<Box | null>((joined, box) => (joined === null ? box : joinBoxes(joined, box)), null);
   // Only what overlaps the proposal's shadow can take from the net new shadow.
   const standing = layer.shadows
     .filter(({ role, box }) => role !== 'proposed' && reach !== null && boxesOverlap(box, reach))
@@ -60,11 +59,6 @@ export function overlapAreaM2(
   return areaM2;
 }
 
-/** Rings with crossing edges made into valid ones that cover the same ground by the even-odd rule. */
-export function mendRings(clipper: Clipper, rings: readonly Ring[]): Ring[] {
-  return combine(clipper, 'Union', rings, [], 'EvenOdd').flat();
-}
-
 /** The union of polygons that may touch or overlap, as valid rings. */
 export function uniteRings(clipper: Clipper, rings: readonly Ring[]): Ring[] {
   return combine(clipper, 'Union', rings, []).flat();
@@ -79,7 +73,6 @@ function combine(
   operation: 'Union' | 'Difference',
   subjects: readonly Ring[],
   clips: readonly Ring[],
-  fill: 'NonZero' | 'EvenOdd' = 'NonZero',
 ): PlanePolygons {
   if (subjects.length === 0) return [];
   const engine = new clipper.ClipperD(decimals);
@@ -89,7 +82,7 @@ function combine(
   try {
     engine.AddSubject(subjectPaths);
     engine.AddClip(clipPaths);
-    if (!engine.ExecutePoly(clipper.ClipType[operation], clipper.FillRule[fill], tree)) {
+    if (!engine.ExecutePoly(clipper.ClipType[operation], clipper.FillRule.NonZero, tree)) {
       throw new Error(`Clipper2 could not compute the ${operation.toLowerCase()} of shadows.`);
     }
     return polygonsOfTree(tree);

@@ -50,15 +50,14 @@ function addEdge(
   box: Box,
 ): void {
   if (highY <= box.minY || lowY >= box.maxY) return;
-  if (lowX >= box.maxX && highX >= box.maxX) return;
   const slope = (highX - lowX) / (highY - lowY);
   const bottomY = Math.max(lowY, box.minY);
   const topY = Math.min(highY, box.maxY);
   const bottomX = bottomY === lowY ? lowX : lowX + (bottomY - lowY) * slope;
   const topX = topY === highY ? highX : lowX + (topY - lowY) * slope;
-  const heightAt = (x: number) =>
-    Math.min(Math.max(lowY + (x - lowX) / slope, bottomY), topY);
+  const heightAt = (x: number) => Math.min(Math.max(lowY + (x - lowX) / slope, bottomY), topY);
 
+  if (bottomX >= box.maxX && topX >= box.maxX) return;
   if (bottomX <= box.minX && topX <= box.minX) {
     push(edges, box.minX, bottomY, box.minX, topY, winding, counter);
     return;

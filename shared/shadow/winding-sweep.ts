@@ -16,7 +16,7 @@ export type Classify = (windings: Int32Array) => number;
  *
  * Between two neighbouring heights at which edges begin, end or cross, the edges stand in a fixed
  * order from left to right, and between two of them each winding number is constant: the regions
- * are trapezoids. An upward edge of a counter-clockwise ring has the solid on its left, so a walk
+ * are trapezoids, the last of them up to the box's right side. An upward edge of a counter-clockwise ring has the solid on its left, so a walk
  * from left to right loses one at it and gains one at a downward edge.
  *
  * The measure keeps its scratch memory from call to call: make one for each study.
@@ -39,7 +39,7 @@ export function createWindingSweep(counterCount: number) {
     for (const { counter, rings } of layers) {
       for (const ring of rings) addRing(edges, ring, counter, box);
     }
-    if (edges.count < 2) return;
+    if (edges.count === 0) return;
 
     const heights = stripHeights(edges);
     const byLowEnd = Uint32Array.from({ length: edges.count }, (_, edge) => edge).sort(
@@ -56,7 +56,7 @@ export function createWindingSweep(counterCount: number) {
         waiting += 1;
       }
       fillStrip(strip, edges, active, bottomY, topY);
-      sweepStrip(strip, edges, topY - bottomY, windings, classify, areas);
+      sweepStrip(strip, edges, box, topY - bottomY, windings, classify, areas);
     }
   };
 }
@@ -96,6 +96,7 @@ function fillStrip(
 function sweepStrip(
   strip: Strip,
   edges: SweepEdges,
+  box: Box,
   heightM: number,
   windings: Int32Array,
   classify: Classify,
@@ -105,10 +106,10 @@ function sweepStrip(
   let fromShare = 0;
   for (const toShare of cuts) {
     if (toShare <= fromShare) continue;
-    addTrapezoids(strip, edges, heightM, fromShare, toShare, windings, classify, areas);
+    addTrapezoids(strip, edges, box, heightM, fromShare, toShare, windings, classify, areas);
     fromShare = toShare;
   }
-  addTrapezoids(strip, edges, heightM, fromShare, 1, windings, classify, areas);
+  addTrapezoids(strip, edges, box, heightM, fromShare, 1, windings, classify, areas);
 }
 
 /** The shares of the strip's height at which two of its edges cross, rising. Sorts `order` by the bottom. */
@@ -136,6 +137,7 @@ function crossingShares({ count, order, bottomX, topX }: Strip): number[] {
 function addTrapezoids(
   strip: Strip,
   edges: SweepEdges,
+  box: Box,
   heightM: number,
   fromShare: number,
   toShare: number,
@@ -153,19 +155,21 @@ function addTrapezoids(
   if (fromShare > 0 || toShare < 1) order.sort((a, b) => middleX(a) - middleX(b));
   windings.fill(0);
   const partM = heightM * (toShare - fromShare);
-  let previousX = 0;
+  let previousX = box.minX;
+  const addUpTo = (x: number) => {
+    if (x <= previousX) return;
+    const area = classify(windings);
+    if (area >= 0) areas[area] = at(areas, area) + (x - previousX) * partM;
+    previousX = x;
+  };
   for (let index = 0; index < count; index += 1) {
     const current = at(order, index);
-    const x = middleX(current);
-    if (index > 0 && x > previousX) {
-      const area = classify(windings);
-      if (area >= 0) areas[area] = at(areas, area) + (x - previousX) * partM;
-    }
-    previousX = x;
+    addUpTo(middleX(current));
     const edgeIndex = at(edge, current);
     const counter = at(edges.counter, edgeIndex);
     windings[counter] = at(windings, counter) - at(edges.winding, edgeIndex);
   }
+  addUpTo(box.maxX);
 }
 
 /** The heights at which edges begin or end, rising, each once. */
@@ -197,6 +201,7 @@ function xAt(edges: SweepEdges, edge: number, y: number): number {
 /** An element that the sweep's own bookkeeping guarantees to exist. */
 function at(numbers: ArrayLike<number>, index: number): number {
   const value = numbers[index];
-  if (value === undefined) throw new RangeError(`The sweep looked beyond its ${numbers.length} edges.`);
+  if (value === undefined)
+    {throw new RangeError(`The sweep looked beyond its ${numbers.length} edges.`);}
   return value;
 }

@@ -86,8 +86,7 @@ export function beamForAirMassWm2(
     cosineOfZenith *
     Math.exp(-cg2 * absoluteAirMass * (fh1 + fh2 * (linkeTurbidity - 1)));
   const b = 0.664 + 0.163 / fh1;
-  const first =
-    extraterrestrialWm2 * b * Math.exp(-0.09 * absoluteAirMass * (linkeTurbidity - 1));
+  const first = extraterrestrialWm2 * b * Math.exp(-0.09 * absoluteAirMass * (linkeTurbidity - 1));
   const share =
     (1 - (0.1 - 0.2 * Math.exp(-linkeTurbidity)) / (0.1 + 0.882 / fh1)) / cosineOfZenith;
   return Math.max(0, Math.min(first, globalWm2 * Math.max(share, 0)));

@@ -1,0 +1,68 @@
+import { createLocalPlane } from '../geometry/local-plane.ts';
+import { expandDays } from '../rules/rule-days.ts';
+import { windowSpans } from '../rules/rule-window.ts';
+import { studyInputSchema, type StudyInput } from './evidence-schema.ts';
+import { backwardAreaM2 } from './scene.ts';
+
+/** Where in a file something is wrong, and what was expected. */
+export interface InputIssue {
+  path: string;
+  message: string;
+}
+
+export type ReadStudyInput = { ok: true; input: StudyInput } | { ok: false; issues: InputIssue[] };
+
+/** An area that winds backwards and is larger than this is no rounding, m². */
+const leastBackwardM2 = 1e-6;
+
+/**
+ * Reads a study's input: checks its form, fills in every default, and checks what the form cannot
+ * say: footprints that cross themselves, and windows without sun. Members `results` and `digest` of
+ * an evidence file must be taken away first.
+ */
+export function readStudyInput(value: unknown): ReadStudyInput {
+  const parsed = studyInputSchema.safeParse(value);
+  if (!parsed.success) {
+    return {
+      ok: false,
+      issues: parsed.error.issues.map(({ path, message }) => ({
+        path: path.map(String).join('.'),
+        message,
+      })),
+    };
+  }
+  const issues = [...footprintIssues(parsed.data), ...windowIssues(parsed.data)];
+  return issues.length === 0 ? { ok: true, input: parsed.data } : { ok: false, issues };
+}
+
+function footprintIssues(input: StudyInput): InputIssue[] {
+  const plane = createLocalPlane(input.place.longitude, input.place.latitude);
+  const message =
+    'a ring crosses itself or a hole lies outside its shell; send a valid polygon (OGC simple features)';
+  const inCollection = (name: 'blocks' | 'receptors') =>
+    input[name].features.flatMap(({ geometry }, index) =>
+      backwardAreaM2(geometry, plane) > leastBackwardM2
+        ? [{ path: `${name}.features.${index}.geometry`, message }]
+        : [],
+    );
+  const site =
+    input.site !== undefined && backwardAreaM2(input.site, plane) > leastBackwardM2
+      ? [{ path: 'site', message }]
+      : [];
+  return [...site, ...inCollection('blocks'), ...inCollection('receptors')];
+}
+
+function windowIssues(input: StudyInput): InputIssue[] {
+  return input.rule.clauses.flatMap((clause, index) => {
+    const dates = expandDays(clause.days, input.year, input.place).flatMap((group) => group.dates);
+    const hasSun = dates.some((date) => windowSpans(clause, date, input.place).length > 0);
+    return hasSun
+      ? []
+      : [
+          {
+            path: `rule.clauses.${index}.window`,
+            message: 'the sun does not stand in this window on any of its days',
+          },
+        ];
+  });
+}

@@ -1,0 +1,175 @@
+import type { SunLedger } from '../receptors/sun-ledger-schema.ts';
+import { integrateHours, runsAbove, type Run, type SpanLight } from '../rules/day-light.ts';
+import { instantsOfSpan } from '../rules/rule-window.ts';
+import { shadowVector } from '../shadow/shadow-contours.ts';
+import { castShadowLayer } from '../shadow/shadow-layer.ts';
+import { formatInstant, wholeClockHours } from '../solar/civil-time.ts';
+import { keyDatesOfYear } from '../solar/key-dates.ts';
+import { sunAboveSpans } from '../solar/sun-above.ts';
+import { sunPositionAt } from '../solar/sun-position.ts';
+import { beamOnReceptorWm2, skyOf } from './clause-plan.ts';
+import type { StudyInput } from './evidence-schema.ts';
+import { roundArea, roundEnergy, roundMeasure } from './rounding.ts';
+import { buildScene, type Scene, type SceneReceptor } from './scene.ts';
+
+/** The share of a receptor's open area whose loss counts as losing the sun there. */
+const noticedShare = 0.05;
+
+/**
+ * The sun ledger of one receptor on the four key dates: what it has before, after, and loses, hour
+ * by hour, in hours, square metres × hours and direct clear-sky energy. Quantities run straight
+ * between steps.
+ *
+ * @param stepMin minutes between samples
+ * @throws when the study has no receptor of that id, or it has no open area
+ */
+export function computeReceptorLedger(
+  input: StudyInput,
+  receptorId: string,
+  stepMin = 5,
+): SunLedger {
+  const feature = input.receptors.features.find(({ properties }) => properties.id === receptorId);
+  if (feature === undefined) throw new Error(`The study has no receptor ${receptorId}.`);
+  const scene = buildScene({ ...input, receptors: { ...input.receptors, features: [feature] } });
+  const receptor = scene.receptors[0];
+  if (receptor === undefined) throw new Error(`The study has no receptor ${receptorId}.`);
+  return {
+    receptor: receptor.id,
+    class: receptor.class,
+    label: receptor.label,
+    planeM: receptor.planeM,
+    openAreaM2: roundArea(receptor.openAreaM2),
+    stepMin,
+    days: keyDatesOfYear(input.year, input.place.timezone).map(({ event, date }) => ({
+      event,
+      ...ledgerDay(input, scene, receptor, date, stepMin),
+    })),
+  };
+}
+
+function ledgerDay(
+  input: StudyInput,
+  scene: Scene,
+  receptor: SceneReceptor,
+  date: string,
+  stepMin: number,
+): Omit<SunLedger['days'][number], 'event'> {
+  const { timezone, longitude, latitude } = input.place;
+  const spans = sunAboveSpans(date, timezone, longitude, latitude, 0);
+  const hours = wholeClockHours(date, timezone);
+  const lit = spans.flatMap((span) => {
+    // Cut at the clock hours, so that each hour's account is a sum of whole steps.
+    const cuts = [
+      span.startMs,
+      ...hours.filter((at) => at > span.startMs && at < span.endMs),
+      span.endMs,
+    ];
+    return cuts.slice(1).map((endMs, index) =>
+      lightThrough(input, scene, receptor, date, {
+        startMs: cuts[index] ?? endMs,
+        endMs,
+        stepMin,
+      }),
+    );
+  });
+  const instant = (atMs: number) => formatInstant(atMs, timezone);
+  const first = spans[0];
+  const last = spans.at(-1);
+  return {
+    date,
+    sunriseAt: first === undefined ? null : instant(first.startMs),
+    sunsetAt: last === undefined ? null : instant(last.endMs),
+    ...account(lit, receptor.openAreaM2),
+    lostSpans: joinRuns(
+      lit.flatMap((span) =>
+        runsAbove(
+          span,
+          noticedShare * receptor.openAreaM2,
+          (index) => span.lights[index]?.netNewM2 ?? 0,
+        ),
+      ),
+    ).map((run) => ({ fromAt: instant(run.startMs), toAt: instant(run.endMs) })),
+    hours: lit.map((span) => ({
+      fromAt: instant(span.atMs[0] ?? 0),
+      toAt: instant(span.atMs.at(-1) ?? 0),
+      ...account([span], receptor.openAreaM2),
+    })),
+    samples: lit.flatMap((span, spanIndex) =>
+      span.atMs.slice(spanIndex === 0 ? 0 : 1).map((atMs, index) => {
+        const light = span.lights[index + (spanIndex === 0 ? 0 : 1)];
+        const share = (areaM2: number) =>
+          receptor.openAreaM2 > 0 ? roundMeasure(areaM2 / receptor.openAreaM2) : 0;
+        return {
+          at: instant(atMs),
+          altitudeDeg: roundMeasure(sunPositionAt(atMs, longitude, latitude).altitudeDeg),
+          shareBefore: share(light?.sunBeforeM2 ?? 0),
+          shareAfter: share(light?.sunAfterM2 ?? 0),
+        };
+      }),
+    ),
+  };
+}
+
+function lightThrough(
+  input: StudyInput,
+  scene: Scene,
+  receptor: SceneReceptor,
+  date: string,
+  { startMs, endMs, stepMin }: { startMs: number; endMs: number; stepMin: number },
+): SpanLight {
+  const atMs = instantsOfSpan({ startMs, endMs }, stepMin);
+  const sky = skyOf(date, input);
+  return {
+    atMs,
+    lights: atMs.map((at) => {
+      const sun = sunPositionAt(at, input.place.longitude, input.place.latitude);
+      const layer = castShadowLayer(
+        scene.blocks,
+        shadowVector(sun),
+        receptor.planeM,
+        receptor.area.box,
+      );
+      return scene.measures.light(receptor.area, layer);
+    }),
+    beamWm2: atMs.map((at) => beamOnReceptorWm2(at, receptor, sky, input)),
+  };
+}
+
+/** Before, after and lost over some spans: mean hours, m² × hours and kWh/m². */
+function account(spans: readonly SpanLight[], openAreaM2: number) {
+  const balance = (
+    valueAt: (span: SpanLight, index: number, areaM2: number) => number,
+    round: (value: number) => number,
+  ) => {
+    const total = (state: 'sunBeforeM2' | 'sunAfterM2') =>
+      spans.reduce(
+        (sum, span) =>
+          sum +
+          integrateHours(span, (index) => valueAt(span, index, span.lights[index]?.[state] ?? 0)),
+        0,
+      );
+    const before = total('sunBeforeM2');
+    const after = total('sunAfterM2');
+    return { before: round(before), after: round(after), lost: round(before - after) };
+  };
+  const share = (areaM2: number) => (openAreaM2 > 0 ? areaM2 / openAreaM2 : 0);
+  return {
+    sunHours: balance((_span, _index, areaM2) => share(areaM2), roundMeasure),
+    areaHoursM2h: balance((_span, _index, areaM2) => areaM2, roundArea),
+    beamEnergyKwhM2: balance(
+      (span, index, areaM2) => (share(areaM2) * (span.beamWm2[index] ?? 0)) / 1000,
+      roundEnergy,
+    ),
+  };
+}
+
+/** Runs that meet at the end of one span and the start of the next are one. */
+function joinRuns(runs: readonly Run[]): Run[] {
+  return runs.reduce<Run[]>((joined, run) => {
+    const last = joined.at(-1);
+    if (last !== undefined && run.startMs - last.endMs < 1000) {
+      return [...joined.slice(0, -1), { startMs: last.startMs, endMs: run.endMs }];
+    }
+    return run.endMs > run.startMs ? [...joined, run] : joined;
+  }, []);
+}
