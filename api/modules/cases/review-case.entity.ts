@@ -29,6 +29,8 @@ export const ReviewCase = defineEntity({
     address: p.text(),
     site: p.type(new GeometryType<Polygonal>()).ignoreSchemaChanges('type'),
     sitePoint: p.type(new GeometryType<Point>()).ignoreSchemaChanges('type'),
+    /** When the site was last picked: a massing from before was checked against another one. */
+    siteSince: p.datetime(3),
     createdAt: p.datetime(3).onCreate(() => new Date()),
   },
   indexes: [{ name: 'review_case_site_index', properties: ['site'], type: 'gist' }],
