@@ -14,6 +14,9 @@ import type { MassingBlock } from './massing-block.ts';
 /** Outline first, then its holes; outline counter-clockwise, holes clockwise. */
 export type PlaneOutline = readonly Ring[];
 
+/** Edges looked at in comparing pairs of blocks, at most: about a second's work. */
+export const mostComparedEdges = 1_000_000;
+
 /** A block with its footprint on the local plane, in metres. */
 export interface BlockFootprint {
   block: MassingBlock;
@@ -63,6 +66,10 @@ export function measureOverlap(
 ): { areaM2: number; at: PlanePoint | null } | null {
   if (!boxesOverlap(a.box, b.box)) return { areaM2: 0, at: null };
   return measureWhere([a.rings, b.rings], ([inA, inB]) => inA !== 0 && inB !== 0);
+}
+
+export function countCorners({ rings }: BlockFootprint): number {
+  return rings.reduce((sum, ring) => sum + ring.length, 0);
 }
 
 /** How much of their heights two blocks share, in metres. */

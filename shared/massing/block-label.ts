@@ -8,19 +8,25 @@ export interface BlockLabel {
 }
 
 export function labelBlock({ id, name }: { id: string; name: string | null }): BlockLabel {
+  const [shortId, shortName] = [shorten(id), shorten(name ?? id)];
   return {
-    feature: id,
-    text: name === null || name === id ? `Block ${id}` : `Block ${id} (${name})`,
+    feature: shortId,
+    text: shortName === shortId ? `Block ${shortId}` : `Block ${shortId} (${shortName})`,
   };
 }
 
 /** For a feature of a file that may have neither id nor name. @param number Its place, counted from 1. */
 export function labelFeature(id: string | null, name: string | null, number: number): BlockLabel {
   if (id !== null) return labelBlock({ id, name });
-  if (name !== null) return { feature: name, text: `Block ${name}` };
+  if (name !== null) return labelBlock({ id: name, name });
   return { feature: `feature ${number}`, text: `Feature ${number}` };
 }
 
 export function placeAt(label: BlockLabel, lngLat: [number, number] | null): IssuePlace {
   return { feature: label.feature, lngLat };
+}
+
+/** An id or a name may be of any length; a sentence must stay one. */
+function shorten(text: string): string {
+  return text.length > 100 ? `${text.slice(0, 97)}…` : text;
 }

@@ -2,6 +2,7 @@ import { placeAt, type BlockLabel } from './block-label.ts';
 import { createIssue, type IssueCode } from './issue-severities.ts';
 import type { MassingBlock, MassingRole } from './massing-block.ts';
 import type { MassingIssue } from './massing-issue.ts';
+import { showValue } from './show-value.ts';
 
 /** The names under which each property is found, in lower case without `_`, `-` and spaces. */
 const propertyNames = {
@@ -22,6 +23,9 @@ const roleNames: Record<string, MassingRole> = {
   remove: 'existing',
   removed: 'existing',
 };
+
+/** No building has more. */
+const mostStoreys = 300;
 
 export interface ReadProperties {
   /** Null when base, top or role could not be read; the issues then say what. */
@@ -63,11 +67,15 @@ export function readBlockProperties(
       'Give base in metres where the block stands on another one or hangs over the ground.',
     );
   }
-  const topName = found.top[0]?.name ?? '';
-  if (baseM !== 0 && /height/i.test(topName)) {
+  const [topEntry] = found.top;
+  if (
+    baseM !== 0 &&
+    topEntry !== undefined &&
+    found.top.every(({ name }) => /height/i.test(name))
+  ) {
     say(
       'MASSING_HEIGHT_READ_AS_TOP',
-      `${label.text}: ${topName} ${topM} was read as the height of the top above the ground, not above the base of ${baseM} m.`,
+      `${label.text}: ${topEntry.name} ${topM} was read as the height of the top above the ground, not above the base of ${baseM} m.`,
       'Send top instead, in metres above the ground, if that is not what is meant.',
     );
   }
@@ -112,7 +120,7 @@ function readRole(
   if (role !== undefined) return role;
   say(
     'MASSING_ROLE_UNKNOWN',
-    `${label.text} has the role ${show(entry.value)}, which is not known.`,
+    `${label.text} has the role ${showValue(entry.value)}, which is not known.`,
     'Write "proposed" for what comes, "existing" for what stands on the site and is removed.',
   );
   return null;
@@ -126,24 +134,19 @@ function readNumber(entries: readonly Entry[], say: Say, label: BlockLabel): num
     if (number === null) {
       say(
         'MASSING_NUMBER_INVALID',
-        `${label.text} has the ${name} ${show(value)}, which is no number.`,
+        `${label.text} has the ${name} ${showValue(value)}, which is no number.`,
         `Give ${name} as a plain number of metres, for example 12.5.`,
       );
       return null;
     }
-    if (typeof value === 'string') {
-      say(
-        'MASSING_NUMBER_AS_TEXT',
-        `${label.text}: the text ${show(value)} in ${name} was read as the number ${number}.`,
-      );
-    }
+    if (typeof value === 'string') sayNumberAsText({ name, value }, number, say, label);
     numbers.push(number);
   }
   const [first] = numbers;
   if (first !== undefined && numbers.every((number) => number === first)) return first;
   say(
     'MASSING_PROPERTIES_DISAGREE',
-    `${label.text} gives the same height in different ways: ${entries.map(({ name, value }) => `${name} ${show(value)}`).join(', ')}.`,
+    `${label.text} gives the same height in different ways: ${entries.map(({ name, value }) => `${name} ${showValue(value)}`).join(', ')}.`,
     'Keep base and top alone, in metres above the ground.',
   );
   return null;
@@ -157,14 +160,24 @@ function toNumber(value: unknown): number | null {
   return Number.isFinite(number) ? number : null;
 }
 
+function sayNumberAsText({ name, value }: Entry, number: number, say: Say, label: BlockLabel) {
+  say(
+    'MASSING_NUMBER_AS_TEXT',
+    `${label.text}: the text ${showValue(value)} in ${name} was read as the number ${number}.`,
+  );
+}
+
 function readStoreys(entries: readonly Entry[], say: Say, label: BlockLabel): number | null {
   const [entry] = entries;
   if (entry === undefined) return null;
   const number = toNumber(entry.value);
-  if (number !== null && Number.isInteger(number) && number >= 1 && number <= 300) return number;
+  if (number !== null && Number.isInteger(number) && number >= 1 && number <= mostStoreys) {
+    if (typeof entry.value === 'string') sayNumberAsText(entry, number, say, label);
+    return number;
+  }
   say(
     'MASSING_STOREYS_NOT_READ',
-    `${label.text} has the ${entry.name} ${show(entry.value)}, which is no whole number of storeys; it was left out.`,
+    `${label.text} has the ${entry.name} ${showValue(entry.value)}, which is no whole number of storeys; it was left out.`,
     'Give storeys as a whole number, or leave it out.',
   );
   return null;
@@ -193,10 +206,4 @@ function describeMissingTop(
     `${label.text} has no top height.`,
     'Add top, the height of the roof or parapet above the ground in metres.',
   ];
-}
-
-function show(value: unknown): string {
-  const text = JSON.stringify(value) as string | undefined;
-  if (text === undefined) return 'nothing';
-  return text.length > 60 ? `${text.slice(0, 57)}…` : text;
 }

@@ -1,5 +1,8 @@
+import { boxesOverlap } from '../geometry/ring.ts';
 import {
+  countCorners,
   measureOverlap,
+  mostComparedEdges,
   sharedHeightM,
   toBlockFootprint,
   type BlockFootprint,
@@ -7,6 +10,7 @@ import {
 import { describeFootprint } from './footprint-key.ts';
 import type { MassingBlock } from './massing-block.ts';
 import { createPlaneAround } from './measure-massing.ts';
+import { isNumberedId } from './name-blocks.ts';
 
 /** What a comparison says of a block in one revision. */
 export interface ComparedBlock {
@@ -31,8 +35,8 @@ const sameHeightM = 0.001;
 
 /**
  * What changed from one massing to another, block by block: in the later one's order, then what was removed.
- * Blocks are matched by id, then by the best overlapping footprint of the same role at shared heights. `same`
- * means same role, footprint (to a centimetre), base and top; names and storeys are not compared.
+ * Blocks are matched by id (unless it is a mere number in the file), then by the best overlapping footprint of the
+ * same role at shared heights. `same` means same role, footprint (to a centimetre), base and top; names and storeys are not compared.
  */
 export function compareMassings(
   before: readonly MassingBlock[],
@@ -43,12 +47,16 @@ export function compareMassings(
   const later = after.map((block) => toBlockFootprint(block, plane));
   const matches = matchBlocks(earlier, later);
   const matched = new Set(matches.values());
+  const laterIds = new Set(after.map(({ id }) => id));
   return [
     ...later.map((footprint) => describeChange(matches.get(footprint) ?? null, footprint)),
     ...earlier
       .filter((footprint) => !matched.has(footprint))
       .map((footprint): BlockChange => ({
-        id: footprint.block.id,
+        // A numbered id can stand for another block later on.
+        id: laterIds.has(footprint.block.id)
+          ? `${footprint.block.id} (earlier revision)`
+          : footprint.block.id,
         change: 'removed',
         before: present(footprint),
         after: null,
@@ -62,35 +70,60 @@ function matchBlocks(
   later: readonly BlockFootprint[],
 ): Map<BlockFootprint, BlockFootprint> {
   const matches = new Map<BlockFootprint, BlockFootprint>();
+  const unmatched = new Set(earlier);
+  const match = (a: BlockFootprint, b: BlockFootprint | undefined) => {
+    if (b === undefined || matches.has(a) || !unmatched.has(b)) return;
+    matches.set(a, b);
+    unmatched.delete(b);
+  };
+
   const byId = new Map(earlier.map((footprint) => [footprint.block.id, footprint]));
   for (const footprint of later) {
-    const match = byId.get(footprint.block.id);
-    if (match === undefined) continue;
-    matches.set(footprint, match);
-    byId.delete(footprint.block.id);
+    const { id } = footprint.block;
+    if (!isNumberedId(id)) match(footprint, byId.get(id));
   }
-  const candidates = later
-    .filter((footprint) => !matches.has(footprint))
-    .flatMap((a) => [...byId.values()].flatMap((b) => rateMatch(b, a)))
-    .sort((one, other) => other.sharedM3 - one.sharedM3);
-  for (const { a, b } of candidates) {
-    if (matches.has(a) || !byId.has(b.block.id)) continue;
-    matches.set(a, b);
-    byId.delete(b.block.id);
-  }
+  const open = later.filter((footprint) => !matches.has(footprint));
+  for (const { a, b } of listCandidates(open, [...unmatched])) match(a, b);
   return matches;
 }
 
-/** How much space an earlier block and a later one share, if that is enough to take them for the same block. */
-function rateMatch(
-  b: BlockFootprint,
-  a: BlockFootprint,
-): { a: BlockFootprint; b: BlockFootprint; sharedM3: number }[] {
-  if (a.block.role !== b.block.role || a.areaM2 === null || b.areaM2 === null) return [];
+interface Candidate {
+  a: BlockFootprint;
+  b: BlockFootprint;
+  /** The space that both fill. */
+  sharedM3: number;
+}
+
+/** Pairs of blocks that may be the same one, the likeliest first. */
+function listCandidates(
+  later: readonly BlockFootprint[],
+  earlier: readonly BlockFootprint[],
+): Candidate[] {
+  const candidates: Candidate[] = [];
+  let edges = 0;
+  for (const a of later) {
+    for (const b of earlier) {
+      if (!boxesOverlap(a.box, b.box)) continue;
+      edges += countCorners(a) + countCorners(b);
+      // What is left then counts as added and removed.
+      if (edges > mostComparedEdges) return sortCandidates(candidates);
+      const sharedM3 = measureLikeness(a, b);
+      if (sharedM3 > 0) candidates.push({ a, b, sharedM3 });
+    }
+  }
+  return sortCandidates(candidates);
+}
+
+function sortCandidates(candidates: Candidate[]): Candidate[] {
+  return candidates.sort((one, other) => other.sharedM3 - one.sharedM3);
+}
+
+/** The space that two blocks share, in m³, if it is enough to take them for the same block; else 0. */
+function measureLikeness(a: BlockFootprint, b: BlockFootprint): number {
+  if (a.block.role !== b.block.role || a.areaM2 === null || b.areaM2 === null) return 0;
   const sharedM2 = measureOverlap(a, b)?.areaM2 ?? 0;
-  const sharedM3 = sharedM2 * sharedHeightM(a.block, b.block);
   const isEnough = sharedM2 >= leastSharedFootprint * (a.areaM2 + b.areaM2 - sharedM2);
-  return isEnough && sharedM3 > 0 ? [{ a, b, sharedM3 }] : [];
+  return isEnough ? sharedM2 * sharedHeightM(a.block, b.block) : 0;
 }
 
 function describeChange(before: BlockFootprint | null, after: BlockFootprint): BlockChange {

@@ -8,7 +8,7 @@ export interface SweepCell {
   heightM: number;
   /** Its middle. */
   at: PlanePoint;
-  corners: readonly PlanePoint[];
+  corners: () => PlanePoint[];
 }
 
 interface SweepEdge {
@@ -163,10 +163,11 @@ function visitSlab(
       widthM,
       heightM: north - south,
       at: [(west.x + east.x) / 2, middle],
-      corners: [west, east].flatMap((edge): PlanePoint[] => [
-        [xAt(edge, south), south],
-        [xAt(edge, north), north],
-      ]),
+      corners: () =>
+        [west, east].flatMap((edge): PlanePoint[] => [
+          [xAt(edge, south), south],
+          [xAt(edge, north), north],
+        ]),
     });
   }
 }

@@ -12,7 +12,8 @@ export const issueSeverities = {
   MASSING_JSON_TOO_DEEP: 'error',
   MASSING_GEOJSON_TYPE: 'error',
   MASSING_NO_FEATURES: 'error',
-  MASSING_CRS_NOT_WGS_EIGHTY_FOUR: 'error',
+  MASSING_CRS_NOT_READ: 'error',
+  MASSING_TOO_MANY_FEATURES: 'error',
   MASSING_TOO_MANY_VERTICES: 'error',
 
   // one feature that could not be read as a block
@@ -37,6 +38,7 @@ export const issueSeverities = {
   MASSING_ID_MISSING: 'repaired',
   MASSING_ID_REPEATED: 'repaired',
   MASSING_ID_TOO_LONG: 'repaired',
+  MASSING_NAME_TOO_LONG: 'repaired',
   MASSING_NUMBER_AS_TEXT: 'repaired',
   MASSING_HEIGHTS_IN_COORDINATES: 'warning',
   MASSING_HEIGHT_READ_AS_TOP: 'warning',
@@ -46,6 +48,7 @@ export const issueSeverities = {
   MASSING_HEIGHT_NOT_A_NUMBER: 'error',
   MASSING_TOP_NOT_ABOVE_BASE: 'error',
   MASSING_HEIGHT_OVER_LIMIT: 'error',
+  MASSING_BLOCK_BELOW_GROUND: 'warning',
   MASSING_RING_CROSSES_ITSELF: 'error',
   MASSING_HOLE_OUTSIDE: 'error',
   MASSING_HOLE_CROSSES_OUTLINE: 'error',

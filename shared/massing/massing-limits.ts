@@ -2,5 +2,6 @@
 export const massingLimits = {
   fileBytes: 25 * 1024 * 1024,
   vertices: 20_000,
+  features: 5_000,
   topM: 1000,
 } as const;

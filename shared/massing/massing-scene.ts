@@ -2,8 +2,10 @@ import type { MultiPolygon, Polygon } from 'geojson';
 import { createLocalPlane } from '../geometry/local-plane.ts';
 import { boxesOverlap, type PlanePoint, type Ring } from '../geometry/ring.ts';
 import {
+  countCorners,
   listRings,
   measureOverlap,
+  mostComparedEdges,
   toBlockFootprint,
   toPlaneOutlines,
   type BlockFootprint,
@@ -49,9 +51,6 @@ export type MassingCheck = (scene: MassingScene) => MassingIssue[];
 /** Areas below this are drawing noise: m². */
 export const leastAreaM2 = 0.5;
 
-/** Edges looked at in comparing pairs of blocks, at most: about a second's work. */
-const mostPairEdges = 1_000_000;
-
 export function createMassingScene(
   blocks: readonly MassingBlock[],
   site: MassingSite,
@@ -96,8 +95,8 @@ function listOverlaps(
       if (b.box.minX >= a.box.maxX) break;
       edges += 1;
       if (!boxesOverlap(a.box, b.box)) continue;
-      edges += countPoints(a) + countPoints(b);
-      if (edges > mostPairEdges) return { overlaps, isEveryPairCompared: false };
+      edges += countCorners(a) + countCorners(b);
+      if (edges > mostComparedEdges) return { overlaps, isEveryPairCompared: false };
       const overlap = measureOverlap(a, b);
       if (overlap === null) return { overlaps, isEveryPairCompared: false };
       const { areaM2, at } = overlap;
@@ -105,10 +104,6 @@ function listOverlaps(
     }
   }
   return { overlaps, isEveryPairCompared: true };
-}
-
-function countPoints({ rings }: BlockFootprint): number {
-  return rings.reduce((sum, ring) => sum + ring.length, 0);
 }
 
 /** 7 decimals are about a centimetre. */

@@ -11,6 +11,16 @@ export interface UnnamedBlock extends Omit<MassingBlock, 'id'> {
 
 /** An id enters the evidence file, which takes no longer ones. */
 const longestId = 100;
+const longestName = 200;
+
+function numberId(number: number): string {
+  return `block-${number}`;
+}
+
+/** Whether an id says no more than a block's place in its file. */
+export function isNumberedId(id: string): boolean {
+  return /^block-\d+(-\d+)?$/.test(id);
+}
 
 /** Gives every block an id of its own and says what it changed. An id that stands once stays as it is. */
 export function nameBlocks(unnamed: readonly UnnamedBlock[]): {
@@ -23,7 +33,7 @@ export function nameBlocks(unnamed: readonly UnnamedBlock[]): {
   const numbered: string[] = [];
 
   const blocks = unnamed.map(({ label, ...block }, index): MassingBlock => {
-    const wanted = block.id?.slice(0, longestId) ?? `block-${index + 1}`;
+    const wanted = block.id?.slice(0, longestId) ?? numberId(index + 1);
     const isFree = !taken.has(wanted) && (wanted === block.id || !sent.has(wanted));
     const id = isFree ? wanted : findFreeId(wanted, taken, sent);
     taken.add(id);
@@ -41,7 +51,7 @@ export function nameBlocks(unnamed: readonly UnnamedBlock[]): {
         ),
       );
     }
-    return { ...block, id };
+    return { ...block, id, name: cutName(block.name, id, issues) };
   });
 
   if (numbered.length > 0) {
@@ -55,6 +65,18 @@ export function nameBlocks(unnamed: readonly UnnamedBlock[]): {
     );
   }
   return { blocks, issues };
+}
+
+function cutName(name: string | null, id: string, issues: MassingIssue[]): string | null {
+  if (name === null || name.length <= longestName) return name;
+  issues.push(
+    createIssue(
+      'MASSING_NAME_TOO_LONG',
+      { feature: id, lngLat: null },
+      `Block ${id} has a name of more than ${longestName} characters; it was cut.`,
+    ),
+  );
+  return name.slice(0, longestName);
 }
 
 function findFreeId(wanted: string, taken: Set<string>, sent: Set<string | null>): string {

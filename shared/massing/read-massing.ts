@@ -7,8 +7,7 @@ import type { ReadMassing } from './massing-reading.ts';
 
 export type { ReadMassing } from './massing-reading.ts';
 
-/** In the order in which they are asked: the types that merely look like text come last. */
-const formats: readonly MassingFormat[] = [...unreadFormats, geojsonFormat];
+const readFormats: readonly MassingFormat[] = [geojsonFormat];
 
 /** How much of the file the formats look at to know it. */
 const headBytes = 4096;
@@ -29,6 +28,15 @@ export function readMassing(bytes: Uint8Array, fileName: string): ReadMassing {
       'Send the massing alone: one footprint for each block, without terrain, surroundings or interiors.',
     );
   }
+  const file: MassingFile = { bytes, fileName, head: headOf(bytes) };
+  const unread = unreadFormats.find(({ recognises }) => recognises(file));
+  if (unread !== undefined) {
+    return refuse(
+      'MASSING_FORMAT_NOT_READ',
+      `${fileName} is ${unread.name}, which is not read yet.`,
+      'Send the massing as GeoJSON: one polygon for each block, on WGS 84, with base and top in metres.',
+    );
+  }
   if (isUtf16(bytes)) {
     return refuse(
       'MASSING_ENCODING',
@@ -36,20 +44,13 @@ export function readMassing(bytes: Uint8Array, fileName: string): ReadMassing {
       'Save the file as UTF-8 and send it again.',
     );
   }
-  const file: MassingFile = { bytes, fileName, head: headOf(bytes) };
-  const format = formats.find(({ recognises }) => recognises(file));
-  if (format?.read === undefined) {
-    return format === undefined
-      ? refuse(
-          'MASSING_FORMAT_UNKNOWN',
-          `${fileName} is of no type that is known here.`,
-          'Send the massing as GeoJSON.',
-        )
-      : refuse(
-          'MASSING_FORMAT_NOT_READ',
-          `${fileName} is ${format.name}, which is not read yet.`,
-          'Send the massing as GeoJSON: one polygon for each block, on WGS 84, with base and top in metres.',
-        );
+  const format = readFormats.find(({ recognises }) => recognises(file));
+  if (format === undefined) {
+    return refuse(
+      'MASSING_FORMAT_UNKNOWN',
+      `${fileName} is of no type that is known here.`,
+      'Send the massing as GeoJSON.',
+    );
   }
   const reading = format.read(file);
   return { ...reading, issues: limitIssues(reading.issues) };

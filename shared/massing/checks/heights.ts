@@ -5,7 +5,10 @@ import type { MassingIssue } from '../massing-issue.ts';
 import { massingLimits } from '../massing-limits.ts';
 import { findFirstCorner, type MassingCheck } from '../massing-scene.ts';
 
-/** Base and top are numbers, top lies above base, and neither is beyond what a building reaches. */
+/**
+ * Base and top are numbers, top lies above base, and neither is beyond what a building reaches; a block that stays
+ * below the ground is said to cast no shadow.
+ */
 export const checkHeights: MassingCheck = ({ footprints }) =>
   footprints.flatMap(({ block }) => checkBlock(block) ?? []);
 
@@ -36,6 +39,14 @@ function checkBlock(block: MassingBlock): MassingIssue | null {
       place,
       `${label.text} has its top at ${topM} m, not above its base at ${baseM} m.`,
       'Give both in metres above the ground: top is not the height of the block alone.',
+    );
+  }
+  if (topM <= 0) {
+    return createIssue(
+      'MASSING_BLOCK_BELOW_GROUND',
+      place,
+      `${label.text} ends at ${topM} m, at or below the ground, so it casts no shadow on it.`,
+      'Leave it in if the site lies lower than its surroundings; else check the heights.',
     );
   }
   return null;

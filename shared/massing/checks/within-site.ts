@@ -63,7 +63,7 @@ function measureOutside({ rings }: BlockFootprint, siteRings: readonly Ring[]): 
     ([inBlock, inSite], { areaM2, at, corners }) => {
       if (inBlock === 0 || inSite !== 0) return;
       outside.areaM2 += areaM2;
-      for (const point of [at, ...corners]) {
+      for (const point of [at, ...corners()]) {
         const distanceM = distanceToRings(point, siteRings);
         if (distanceM <= outside.farthestM) continue;
         outside.farthest = point;

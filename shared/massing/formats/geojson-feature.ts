@@ -4,7 +4,8 @@ import { createIssue, type IssueCode } from '../issue-severities.ts';
 import type { MassingBlock } from '../massing-block.ts';
 import type { MassingIssue } from '../massing-issue.ts';
 import type { UnnamedBlock } from '../name-blocks.ts';
-import { findFirstPosition, readPolygons } from './geojson-coordinates.ts';
+import { repairFootprint, type LngLat } from '../repair-footprint.ts';
+import { findFirstPosition, readCoordinates } from './geojson-coordinates.ts';
 import { isRecord } from './json-document.ts';
 
 export interface ReadFeature {
@@ -28,21 +29,24 @@ export function readGeojsonFeature(feature: unknown, number: number): ReadFeatur
   if (!geometry.ok) return { block: null, issues: [geometry.issue], label, hasHeights: false };
 
   const { coordinates, type } = geometry;
-  const footprint = readPolygons(type === 'Polygon' ? [coordinates] : coordinates, label);
+  const drawn = readCoordinates(type === 'Polygon' ? [coordinates] : coordinates, label);
   const read = readBlockProperties(properties, label, findFirstPosition(coordinates));
+  if (!drawn.ok) {
+    return { block: null, issues: [drawn.issue, ...read.issues], label, hasHeights: false };
+  }
+  const { hasHeights } = drawn;
+  const footprint = repairFootprint(drawn.polygons, label);
   const issues = [...footprint.issues, ...read.issues];
-  const { hasHeights } = footprint;
   if (footprint.polygons === null || read.properties === null) {
     return { block: null, issues, label, hasHeights };
   }
-  const block = {
-    id,
+  const drawing = toGeometry(type, footprint.polygons);
+  return {
+    block: { id, label, name, ...read.properties, geometry: drawing },
+    issues,
     label,
-    name,
-    ...read.properties,
-    geometry: toGeometry(type, footprint.polygons),
+    hasHeights,
   };
-  return { block, issues, label, hasHeights };
 }
 
 type ReadGeometry =
@@ -54,7 +58,7 @@ function readGeometry(feature: unknown, label: BlockLabel): ReadGeometry {
     code: IssueCode,
     message: string,
     suggestion: string,
-    lngLat: [number, number] | null = null,
+    lngLat: LngLat | null = null,
   ): ReadGeometry => ({
     ok: false,
     issue: createIssue(code, placeAt(label, lngLat), message, suggestion),
@@ -106,7 +110,7 @@ function readGeometry(feature: unknown, label: BlockLabel): ReadGeometry {
 
 function toGeometry(
   type: 'Polygon' | 'MultiPolygon',
-  polygons: [number, number][][][],
+  polygons: LngLat[][][],
 ): MassingBlock['geometry'] {
   const [only] = polygons;
   return type === 'Polygon' && only !== undefined

@@ -3,6 +3,7 @@ import type { MassingIssue } from '../massing-issue.ts';
 import { massingLimits } from '../massing-limits.ts';
 import type { ReadMassing } from '../massing-reading.ts';
 import { nameBlocks, type UnnamedBlock } from '../name-blocks.ts';
+import { showValue } from '../show-value.ts';
 import { countPositions } from './geojson-coordinates.ts';
 import { readGeojsonFeature } from './geojson-feature.ts';
 import { isRecord, parseJsonDocument } from './json-document.ts';
@@ -32,6 +33,9 @@ const otherJson: Record<string, string> = {
   Topology: 'TopoJSON',
 };
 
+/** How WGS 84 is called: urn:ogc:def:crs:OGC:1.3:CRS84, EPSG:4326, urn:ogc:def:crs:EPSG::4326, WGS 84. */
+const wgs84Names = /(^|[:/])CRS84$|EPSG[:/](.*[:/])?4326$|^WGS ?84$/i;
+
 function readGeojson({ bytes, fileName }: MassingFile): ReadMassing {
   const document = parseJsonDocument(bytes, fileName);
   if (!document.ok) return { ok: false, issues: [document.issue] };
@@ -46,6 +50,13 @@ function readGeojson({ bytes, fileName }: MassingFile): ReadMassing {
       'MASSING_NO_FEATURES',
       `${fileName} holds no features.`,
       'Send one polygon for each block, with base and top in metres.',
+    );
+  }
+  if (features.length > massingLimits.features) {
+    return refuse(
+      'MASSING_TOO_MANY_FEATURES',
+      `${fileName} has ${features.length} features; at most ${massingLimits.features} are read.`,
+      'Send the massing alone: one footprint for each block, without surroundings.',
     );
   }
   const vertices = countPositions(features);
@@ -97,7 +108,7 @@ function listFeatures(root: unknown): unknown[] | null {
 
 function refuseDocument(root: unknown, fileName: string): ReadMassing {
   const type = isRecord(root) && typeof root.type === 'string' ? root.type : null;
-  const other = type === null ? undefined : otherJson[type];
+  const other = isRecord(root) ? nameOtherJson(root) : undefined;
   if (other !== undefined) {
     return refuse(
       'MASSING_FORMAT_NOT_READ',
@@ -114,16 +125,21 @@ function refuseDocument(root: unknown, fileName: string): ReadMassing {
   );
 }
 
+function nameOtherJson({ type, geometryType }: Record<string, unknown>): string | undefined {
+  if (typeof geometryType === 'string' && geometryType.startsWith('esri')) return 'Esri JSON';
+  return typeof type === 'string' && Object.hasOwn(otherJson, type) ? otherJson[type] : undefined;
+}
+
 /** GeoJSON of 2008 could name another system; RFC 7946 (section 4) knows WGS 84 alone. */
 function checkCrs(root: unknown, fileName: string): MassingIssue | null {
   if (!isRecord(root) || root.crs === undefined || root.crs === null) return null;
   const properties = isRecord(root.crs) ? root.crs.properties : null;
   const name = isRecord(properties) && typeof properties.name === 'string' ? properties.name : null;
-  if (name !== null && /(:CRS84|EPSG:(.*:)?4326|^WGS ?84)$/i.test(name.trim())) return null;
+  if (name !== null && wgs84Names.test(name.trim())) return null;
   return createIssue(
-    'MASSING_CRS_NOT_WGS_EIGHTY_FOUR',
+    'MASSING_CRS_NOT_READ',
     wholeFile,
-    `${fileName} says that its coordinates are in ${name ?? 'a system that it does not name'}; GeoJSON is read as longitude and latitude on WGS 84 alone.`,
+    `${fileName} says that its coordinates are in ${name === null ? 'a system that it does not name' : showValue(name)}; GeoJSON is read as longitude and latitude on WGS 84 alone.`,
     'Export it again in WGS 84 (EPSG:4326).',
   );
 }
