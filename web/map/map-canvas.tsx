@@ -204,7 +204,7 @@ function MapButton({ label, onPress, children }: MapButtonProps) {
 function useMapContents(map: maplibregl.Map | null, props: CaseMapProps): void {
   const { site = null, shadows = null, layer = 'after', chosenReceptor = null } = props;
   const { blocks = none, receptors = none, pins = none, pickedParcels = none } = props;
-  const { length: writeLength } = useFormats();
+  const { figure } = useFormats();
 
   useEffect(() => {
     const features =
@@ -216,8 +216,8 @@ function useMapContents(map: maplibregl.Map | null, props: CaseMapProps): void {
   }, [map, shadows]);
   useEffect(() => {
     fill(map, 'blocks', blockFeatures(blocks));
-    fill(map, 'block-labels', blockLabelFeatures(blocks, writeLength));
-  }, [map, blocks, writeLength]);
+    fill(map, 'block-labels', blockLabelFeatures(blocks, figure.height));
+  }, [map, blocks, figure]);
   useEffect(() => {
     fill(map, 'receptors', receptorFeatures(receptors));
     fill(map, 'not-met', notMetFeatures(receptors));

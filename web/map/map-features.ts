@@ -50,7 +50,10 @@ export function blockFeatures(blocks: readonly MapBlock[]) {
 }
 
 /** The height of each proposed block, set into one of its corners; neighbours take different corners. */
-export function blockLabelFeatures(blocks: readonly MapBlock[], write: (topM: number) => string) {
+export function blockLabelFeatures(
+  blocks: readonly MapBlock[],
+  writeHeight: (topM: number) => string,
+) {
   const corners = [
     { east: -1, north: 1, anchor: 'top-left' },
     { east: 1, north: 1, anchor: 'top-right' },
@@ -64,7 +67,7 @@ export function blockLabelFeatures(blocks: readonly MapBlock[], write: (topM: nu
       .map((block, index) => {
         const corner = corners[index % corners.length] ?? corners[0];
         return pointFeature(farthestVertex(block.geometry, corner.east, corner.north), {
-          text: `+${write(block.topM)}`,
+          text: writeHeight(block.topM),
           anchor: corner.anchor,
         });
       }),

@@ -1,0 +1,111 @@
+import { describe, expect, it } from 'vitest';
+import type { LngLat, Polygonal } from '../../../shared/geometry/geojson-schema.ts';
+import {
+  blockFeatures,
+  blockLabelFeatures,
+  boundsAround,
+  middleOf,
+  notMetFeatures,
+  type MapBlock,
+  type MapReceptor,
+} from '../../../web/map/map-features.ts';
+
+const square = (west: number, south: number, size: number): Polygonal => ({
+  type: 'Polygon',
+  coordinates: [squareRing(west, south, size)],
+});
+const block = (id: string, topM: number, role: MapBlock['role'] = 'proposed'): MapBlock => ({
+  id,
+  role,
+  topM,
+  geometry: square(-91.3, 46.75, 0.001),
+});
+
+describe('blockFeatures', () => {
+  it('draws a tower after its podium, whatever their order', () => {
+    const { features } = blockFeatures([block('tower', 44), block('podium', 14)]);
+    expect(features.map((one) => one.properties?.['id'])).toEqual(['podium', 'tower']);
+  });
+});
+
+describe('blockLabelFeatures', () => {
+  it('writes a proposed block’s height and nothing on what is removed', () => {
+    const { features } = blockLabelFeatures(
+      [block('tower', 44), block('old', 7, 'existing'), block('podium', 14)],
+      (heightM) => `+${heightM} m`,
+    );
+    expect(features.map((one) => one.properties.text)).toEqual(['+14 m', '+44 m']);
+  });
+
+  it('sets the labels of blocks on one another into different corners', () => {
+    const { features } = blockLabelFeatures([block('a', 1), block('b', 2)], String);
+    expect(features[0]?.geometry.coordinates).toEqual([-91.3, 46.751]);
+    expect(features[1]?.geometry.coordinates[0]).toBeCloseTo(-91.299, 9);
+  });
+});
+
+describe('notMetFeatures', () => {
+  it('sets a cross where the rule is not met and nowhere else', () => {
+    const receptor = (id: string, finding: MapReceptor['finding']): MapReceptor => ({
+      id,
+      finding,
+      label: id,
+      class: 'yard',
+      geometry: square(0, 0, 2),
+    });
+    const { features } = notMetFeatures([
+      receptor('a', 'met'),
+      receptor('b', 'not-met'),
+      receptor('c', null),
+    ]);
+    expect(features).toMatchObject([
+      { geometry: { coordinates: [1, 1] }, properties: { id: 'b' } },
+    ]);
+  });
+});
+
+describe('middleOf', () => {
+  it('is the centroid, in either direction of drawing', () => {
+    const geometry = square(10, 20, 4);
+    const turned: Polygonal = {
+      type: 'Polygon',
+      coordinates: [squareRing(10, 20, 4).toReversed()],
+    };
+    for (const one of [geometry, turned]) {
+      expect(middleOf(one)[0]).toBeCloseTo(12);
+      expect(middleOf(one)[1]).toBeCloseTo(22);
+    }
+  });
+
+  it('lies on the largest of several parts', () => {
+    const parts: Polygonal = {
+      type: 'MultiPolygon',
+      coordinates: [[squareRing(0, 0, 1)], [squareRing(10, 10, 4)]],
+    };
+    expect(middleOf(parts)[0]).toBeCloseTo(12);
+  });
+});
+
+describe('boundsAround', () => {
+  it('holds everything with the margin on each side', () => {
+    const bounds = boundsAround([square(-91.3, 46.75, 0.001)], 111.32);
+    expect(bounds?.[1]).toBeCloseTo(46.749, 6);
+    expect(bounds?.[3]).toBeCloseTo(46.752, 6);
+    // A degree of longitude is shorter there by the cosine of the latitude.
+    expect(bounds?.[0]).toBeCloseTo(-91.3 - 0.001 / Math.cos((46.75 * Math.PI) / 180), 6);
+  });
+
+  it('is null for nothing', () => {
+    expect(boundsAround([])).toBeNull();
+  });
+});
+
+function squareRing(west: number, south: number, size: number): LngLat[] {
+  return [
+    [west, south],
+    [west + size, south],
+    [west + size, south + size],
+    [west, south + size],
+    [west, south],
+  ];
+}
