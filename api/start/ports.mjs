@@ -86,12 +86,23 @@ function processIds() {
  */
 function socketInodes(pid) {
   try {
-    return readdirSync(`/proc/${pid}/fd`).flatMap((fd) => {
-      const target = readlinkSync(`/proc/${pid}/fd/${fd}`);
-      return /^socket:\[(\d+)\]$/.exec(target)?.[1] ?? [];
-    });
+    return readdirSync(`/proc/${pid}/fd`).flatMap(
+      (fd) => /^socket:\[(\d+)\]$/.exec(readLinkOrEmpty(`/proc/${pid}/fd/${fd}`))?.[1] ?? [],
+    );
   } catch {
     return [];
+  }
+}
+
+/**
+ * @param {string} path
+ * @returns {string}
+ */
+function readLinkOrEmpty(path) {
+  try {
+    return readlinkSync(path);
+  } catch {
+    return '';
   }
 }
 

@@ -35,7 +35,7 @@ export function loadDotEnv() {
 export function readSettings(env, projectFolder = PROJECT_FOLDER) {
   const port = readPort(env.PORT);
   const host = env.HOST || '127.0.0.1';
-  const localUrl = `http://${isAnyAddress(host) ? '127.0.0.1' : host}:${port}`;
+  const localUrl = `http://${nameInUrl(host)}:${port}`;
   const appUrl = env.DATABASE_URL ? checkDatabaseUrl('DATABASE_URL', env.DATABASE_URL) : null;
   if (env.DATABASE_OWNER_URL && !appUrl) {
     throw new Problem('DATABASE_OWNER_URL is set without DATABASE_URL: set both or neither.');
@@ -73,11 +73,12 @@ function readPort(text) {
 }
 
 /**
- * @param {string} host
- * @returns {boolean}
+ * @param {string} host that a server listens on
+ * @returns {string} the host that a browser on this machine goes to
  */
-function isAnyAddress(host) {
-  return host === '0.0.0.0' || host === '::';
+function nameInUrl(host) {
+  if (host === '0.0.0.0' || host === '::') return '127.0.0.1';
+  return host.includes(':') ? `[${host}]` : host;
 }
 
 /**

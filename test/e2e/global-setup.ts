@@ -1,4 +1,5 @@
 import { execFile } from 'node:child_process';
+import { mkdirSync, rmSync } from 'node:fs';
 import path from 'node:path';
 import { promisify } from 'node:util';
 import type { TestProject } from 'vitest/node';
@@ -20,6 +21,8 @@ export default async function setup(project: TestProject): Promise<() => Promise
   const port = await findFreePort(FIRST_PORT);
   const baseUrl = `http://127.0.0.1:${port}`;
   const dataFolder = path.join(readVariable('TEST_DATA_FOLDER'), database.name);
+  mkdirSync(dataFolder);
+  lifetime.hold(() => rmSync(dataFolder, { recursive: true, force: true }));
   const env = {
     ...process.env,
     NODE_ENV: 'test',
