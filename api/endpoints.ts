@@ -1,5 +1,6 @@
 import type { Endpoint } from './endpoint.ts';
 import { baseDataEndpoints } from './modules/base-data/base-data.routes.ts';
+import { casesEndpoints } from './modules/cases/cases.routes.ts';
 import { peopleEndpoints } from './modules/people/people.routes.ts';
 import { rulesEndpoints } from './modules/rules/rules.routes.ts';
 import { healthEndpoints } from './modules/settings/health.routes.ts';
@@ -12,4 +13,5 @@ export const endpoints: readonly Endpoint[] = [
   ...municipalityEndpoints,
   ...baseDataEndpoints,
   ...rulesEndpoints,
+  ...casesEndpoints,
 ];

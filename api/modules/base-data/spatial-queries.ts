@@ -66,7 +66,7 @@ export async function dissolveParcels(
      ) as site`,
     [[...numbers]],
   );
-  if (row?.site == null || row.point === null) return null;
+  if (row === undefined || row.site === null || row.point === null) return null;
   return {
     site: polygonalSchema.parse(JSON.parse(row.site)),
     sitePoint: pointSchema.parse(JSON.parse(row.point)),

@@ -24,7 +24,7 @@ export const ReviewCase = defineEntity({
     state: p.enum([...caseStates]).index(),
     stateSince: p.datetime(3),
     applicant: () => p.manyToOne(Person).index(),
-    siteParcels: p.array<string>(),
+    siteParcels: p.array(),
     /** The parcels' addresses as one line, and their dissolved area, as they were when picked. */
     address: p.text(),
     site: p.type(new GeometryType<Polygonal>()).ignoreSchemaChanges('type'),

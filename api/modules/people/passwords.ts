@@ -1,4 +1,4 @@
-import argon2 from 'argon2';
+import { argon2id, hash as hashArgon2, verify as verifyArgon2 } from 'argon2';
 
 /** Memory in KiB and passes over it. */
 export interface PasswordCost {
@@ -11,7 +11,7 @@ const usualCost: PasswordCost = { memoryCost: 47_104, timeCost: 1 };
 
 /** The hash that is stored for a password. */
 export async function hashPassword(password: string, cost = usualCost): Promise<string> {
-  return argon2.hash(password, { type: argon2.argon2id, parallelism: 1, ...cost });
+  return hashArgon2(password, { type: argon2id, parallelism: 1, ...cost });
 }
 
 let nobodysHash: Promise<string> | undefined;
@@ -22,6 +22,6 @@ let nobodysHash: Promise<string> | undefined;
  */
 export async function isPasswordRight(hash: string | null, password: string): Promise<boolean> {
   nobodysHash ??= hashPassword('the password of nobody');
-  const isRight = await argon2.verify(hash ?? (await nobodysHash), password);
+  const isRight = await verifyArgon2(hash ?? (await nobodysHash), password);
   return hash !== null && isRight;
 }
