@@ -1,4 +1,6 @@
+import packageJson from '../package.json' with { type: 'json' };
 import type { Endpoint } from './endpoint.ts';
+import { describeEndpoints } from './modules/api-document/api-document.routes.ts';
 import { baseDataEndpoints } from './modules/base-data/base-data.routes.ts';
 import { casesEndpoints } from './modules/cases/cases.routes.ts';
 import { peopleEndpoints } from './modules/people/people.routes.ts';
@@ -6,12 +8,17 @@ import { rulesEndpoints } from './modules/rules/rules.routes.ts';
 import { healthEndpoints } from './modules/settings/health.routes.ts';
 import { municipalityEndpoints } from './modules/settings/municipality.routes.ts';
 
-/** Every endpoint of the API: the routes and the API's document are made from this list. */
-export const endpoints: readonly Endpoint[] = [
+const workingEndpoints: readonly Endpoint[] = [
   ...healthEndpoints,
   ...peopleEndpoints,
   ...municipalityEndpoints,
   ...baseDataEndpoints,
   ...rulesEndpoints,
   ...casesEndpoints,
+];
+
+/** Every endpoint of the API: the routes and the API's document are made from this list. */
+export const endpoints: readonly Endpoint[] = [
+  ...workingEndpoints,
+  ...describeEndpoints(workingEndpoints, packageJson.version),
 ];

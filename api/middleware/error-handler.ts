@@ -27,6 +27,8 @@ export const notFoundHandler: RequestHandler = () => {
 
 const parserErrorSchema = z.object({ type: z.string(), status: z.number() });
 
+const missingFileSchema = z.object({ status: z.literal(404) });
+
 function toAppError(error: unknown): AppError | null {
   if (error instanceof AppError) return error;
   if (error instanceof multer.MulterError) {
@@ -36,8 +38,10 @@ function toAppError(error: unknown): AppError | null {
           errors: [{ path: error.field ?? '', message: 'Send one file in the field named here.' }],
         });
   }
-  // A path with a broken percent sign.
-  if (error instanceof URIError) return new AppError('NOT_FOUND');
+  // A file that is not there, or a path with a broken percent sign.
+  if (error instanceof URIError || missingFileSchema.safeParse(error).success) {
+    return new AppError('NOT_FOUND');
+  }
   const parserError = parserErrorSchema.safeParse(error);
   if (parserError.success) {
     if (parserError.data.type === 'entity.too.large') return new AppError('UPLOAD_TOO_LARGE');

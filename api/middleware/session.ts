@@ -33,7 +33,6 @@ export function sessions(env: Env, store: Store): RequestHandler {
     secret: env.SESSION_SECRET,
     resave: false,
     saveUninitialized: false,
-    rolling: true,
     cookie: {
       httpOnly: true,
       sameSite: 'lax',

@@ -62,9 +62,9 @@ export async function dissolveParcels(
   const [row] = await em.execute<{ site: string | null; point: string | null }[]>(
     `select ST_AsGeoJSON(dissolved, 15) as site, ST_AsGeoJSON(ST_PointOnSurface(dissolved), 15) as point
      from (
-       select ST_UnaryUnion(ST_Collect(geometry)) as dissolved from parcel where number = any(?::text[])
+       select ST_UnaryUnion(ST_Collect(geometry)) as dissolved from parcel where number in (select jsonb_array_elements_text(?::jsonb))
      ) as site`,
-    [[...numbers]],
+    [JSON.stringify(numbers)],
   );
   if (row === undefined || row.site === null || row.point === null) return null;
   return {
@@ -90,8 +90,8 @@ export async function measureParcels(
 ): Promise<Map<string, number>> {
   const rows = await em.execute<{ number: string; areaM2: number }[]>(
     `select number, ST_Area(geometry::geography) as "areaM2" from parcel
-     where number = any(?::text[])`,
-    [[...numbers]],
+     where number in (select jsonb_array_elements_text(?::jsonb))`,
+    [JSON.stringify(numbers)],
   );
   return new Map(rows.map(({ number, areaM2 }) => [number, areaM2]));
 }
