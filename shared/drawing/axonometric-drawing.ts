@@ -33,12 +33,12 @@ export interface AxonometricOptions {
  * Draws blocks as seen from above with parallel rays: lengths along each direction keep one scale,
  * hidden faces are hidden.
  *
- * @param site the site's parcels, drawn on the ground
+ * @param ground drawn flat: the site's parcels, and hairlines of the lots around
  * @returns an SVG document; the same input gives the same text
  */
 export function drawAxonometric(
   blocks: readonly AxonometricBlock[],
-  site: readonly Polygonal[],
+  ground: { site: readonly Polygonal[]; parcels: readonly Polygonal[] },
   options: AxonometricOptions,
 ): string {
   const plane = createLocalPlane(options.origin.longitude, options.origin.latitude);
@@ -48,12 +48,14 @@ export function drawAxonometric(
     topM,
   }));
   const picture = createPicture(options.view);
-  const ground = site.flatMap((geometry) =>
-    projectPolygon(geometry, plane).map((ring) => ring.map(([x, y]) => picture(x, y, 0))),
-  );
+  const onGround = (geometries: readonly Polygonal[]) =>
+    geometries.flatMap((geometry) =>
+      projectPolygon(geometry, plane).map((ring) => ring.map(([x, y]) => picture(x, y, 0))),
+    );
+  const site = onGround(ground.site);
   const faces = listFaces(prisms, options.view);
   const fit = fitInto(
-    [...ground, ...faces.flatMap((face) => face.rings)].flat(),
+    [...site, ...faces.flatMap((face) => face.rings)].flat(),
     options.width,
     options.height,
   );
@@ -61,8 +63,15 @@ export function drawAxonometric(
 
   return svgDocument({ width: options.width, height: options.height }, options.label, [
     element('path', {
+      'data-part': 'parcels',
+      d: closedPath(onGround(ground.parcels).map((ring) => ring.map(fit.place))),
+      fill: 'none',
+      stroke: palette.hairline,
+      'stroke-width': 0.4,
+    }),
+    element('path', {
       'data-part': 'site',
-      d: closedPath(ground.map((ring) => ring.map(fit.place))),
+      d: closedPath(site.map((ring) => ring.map(fit.place))),
       fill: 'none',
       stroke: palette.ink,
       'stroke-width': 1,
@@ -91,6 +100,9 @@ function drawFace(
       d: closedPath(face.rings.map((ring) => ring.map(place))),
       'fill-rule': 'evenodd',
       fill,
+      // Closes the hair that renderers leave between a wall's layers.
+      stroke: fill,
+      'stroke-width': 0.5,
     }),
     element('path', {
       d: segmentsPath(face.edges.map(([from, to]) => [place(from), place(to)] as const)),

@@ -14,12 +14,14 @@ export function boxesMeet(a: LabelBox, b: LabelBox): boolean {
 
 /** The box around all points of some rings. */
 export function boxAround(rings: readonly SheetRing[]): LabelBox {
-  const points = rings.flat();
-  const xs = points.map(([x]) => x);
-  const ys = points.map(([, y]) => y);
-  const x = Math.min(...xs);
-  const y = Math.min(...ys);
-  return { x, y, width: Math.max(...xs) - x, height: Math.max(...ys) - y };
+  let [left, top, right, bottom] = [Infinity, Infinity, -Infinity, -Infinity];
+  for (const [x, y] of rings.flat()) {
+    left = Math.min(left, x);
+    right = Math.max(right, x);
+    top = Math.min(top, y);
+    bottom = Math.max(bottom, y);
+  }
+  return { x: left, y: top, width: right - left, height: bottom - top };
 }
 
 /** Whether a point lies inside rings, by the even-odd rule. */
@@ -41,16 +43,18 @@ export function isInside([x, y]: SheetPoint, rings: readonly SheetRing[]): boole
 /**
  * A free place for a label inside an area, tried from the upper left to the lower right.
  *
- * @param taken boxes that the label must not meet: what stands higher, and other labels
+ * @param taken boxes that the label must not meet
+ * @param covered areas that the label must not lie on, such as what stands higher
  * @returns null where there is none
  */
 export function placeInside(
   rings: readonly SheetRing[],
   size: { width: number; height: number },
   taken: readonly LabelBox[],
+  covered: readonly (readonly SheetRing[])[] = [],
 ): LabelBox | null {
   const around = boxAround(rings);
-  const steps = 12;
+  const steps = 16;
   for (let row = 0; row <= steps; row += 1) {
     for (let column = 0; column <= steps; column += 1) {
       const box = {
@@ -58,14 +62,11 @@ export function placeInside(
         y: around.y + ((around.height - size.height) * row) / steps,
         ...size,
       };
-      const corners: SheetPoint[] = [
-        [box.x, box.y],
-        [box.x + box.width, box.y],
-        [box.x + box.width, box.y + box.height],
-        [box.x, box.y + box.height],
-      ];
-      const isFree = !taken.some((other) => boxesMeet(box, other));
-      if (isFree && corners.every((corner) => isInside(corner, rings))) return box;
+      if (taken.some((other) => boxesMeet(box, other))) continue;
+      const isFree = pointsOf(box).every(
+        (point) => isInside(point, rings) && !covered.some((other) => isInside(point, other)),
+      );
+      if (isFree) return box;
     }
   }
   return null;
@@ -81,7 +82,7 @@ export function placeBeside(
   const around = boxAround(rings);
   const middleY = around.y + around.height / 2 - size.height / 2;
   const middleX = around.x + around.width / 2 - size.width / 2;
-  const gap = 4;
+  const gap = 10;
   const right = { x: around.x + around.width + gap, y: middleY, ...size };
   const candidates: LabelBox[] = [
     right,
@@ -96,4 +97,12 @@ export function placeBeside(
     box.y + box.height <= frame.height &&
     !taken.some((other) => boxesMeet(box, other));
   return candidates.find(fits) ?? right;
+}
+
+/** Points on a box's border and in its middle, close enough together for labels. */
+function pointsOf(box: LabelBox): SheetPoint[] {
+  const shares = [0, 0.25, 0.5, 0.75, 1];
+  return shares.flatMap((across) =>
+    [0, 0.5, 1].map((down): SheetPoint => [box.x + box.width * across, box.y + box.height * down]),
+  );
 }

@@ -1,18 +1,26 @@
 import type { Polygonal } from '../geometry/geojson-schema.ts';
 import { createLocalPlane } from '../geometry/local-plane.ts';
 import type { FigureFormat } from './figure-format.ts';
-import { createFrame, extentOnPlane, type Frame, type SheetRing } from './frame.ts';
+import {
+  createFrame,
+  extentOnPlane,
+  type Frame,
+  type SheetPoint,
+  type SheetRing,
+} from './frame.ts';
 import { hatchLines } from './hatch.ts';
 import { drawNorth, drawScaleBar } from './north-and-scale.ts';
 import { palette } from './palette.ts';
 import { closedPath, outlinePath, segmentsPath } from './path-data.ts';
-import { drawBlockHeights, drawKeys, drawNames, type NamedArea } from './plan-labels.ts';
+import { drawAreaNames, drawBlockHeights, drawKeys, type NamedArea } from './plan-labels.ts';
+import { drawStreetNames, type StreetLine } from './street-names.ts';
 import { element, group, svgDocument, type Svg } from './svg.ts';
 import { drawTitleBlock, measureTitleBlock } from './title-block.ts';
 
 /** What a plan shows; longitude and latitude throughout. Parts that are not wanted are left empty. */
 export interface PlanContent {
   streets: readonly NamedArea[];
+  streetLines: readonly StreetLine[];
   water: readonly NamedArea[];
   openSpace: readonly NamedArea[];
   parcels: readonly Polygonal[];
@@ -27,7 +35,7 @@ export interface PlanContent {
   shadows: { standing: Polygonal; netNew: Polygonal } | null;
   /** The receptor that the reader has picked. */
   chosen: Polygonal | null;
-  /** Receptors that don't meet a clause, each with its mark in a list. */
+  /** Receptors that don't meet a clause, each with its mark in a list; drawn in detail `sheet` only. */
   notMet: readonly { geometry: Polygonal; mark: string }[];
 }
 
@@ -50,6 +58,7 @@ export interface PlanOptions {
 /** A plan with nothing on it, to be filled. */
 export const emptyPlan: PlanContent = {
   streets: [],
+  streetLines: [],
   water: [],
   openSpace: [],
   parcels: [],
@@ -76,6 +85,10 @@ export function drawPlan(content: PlanContent, options: PlanOptions): string {
   const proposal = content.proposal.map(({ geometry, topM }) => ({
     rings: frame.cutRings(geometry),
     topM,
+  }));
+  const streets = content.streetLines.map(({ name, lines }) => ({
+    name,
+    lines: lines.map((line) => line.map((lngLat) => frame.toSheet(plane.toPlane(lngLat)))),
   }));
   const keys = content.notMet.map(({ geometry, mark }) => ({
     rings: frame.cutRings(geometry),
@@ -111,13 +124,13 @@ export function drawPlan(content: PlanContent, options: PlanOptions): string {
         'stroke-width': pen.proposal,
       }),
     ),
-    ...keys.map(({ rings }) =>
+    ...(isSheet ? keys : []).map(({ rings }) =>
       element('path', {
         'data-part': 'not-met',
         d: outlinePath(rings, frame),
         fill: 'none',
         stroke: palette.madder,
-        'stroke-width': pen.receptor,
+        'stroke-width': 1.4,
       }),
     ),
     ...(content.chosen === null
@@ -128,7 +141,7 @@ export function drawPlan(content: PlanContent, options: PlanOptions): string {
             'stroke-width': 2.4,
           }),
         ]),
-    ...(isSheet ? drawSheetText(content, frame, proposal, keys, options) : []),
+    ...(isSheet ? drawSheetText(content, streets, frame, proposal, keys, options) : []),
     element('rect', {
       width: frame.width,
       height: frame.height,
@@ -148,7 +161,6 @@ interface Pen {
   site: number;
   siteDashes: string;
   proposal: number;
-  receptor: number;
   frame: number;
 }
 
@@ -161,7 +173,6 @@ const sheetPen: Pen = {
   site: 1.5,
   siteDashes: '10 3 2 3',
   proposal: 2,
-  receptor: 1.6,
   frame: 1.6,
 };
 
@@ -174,7 +185,6 @@ const smallPen: Pen = {
   site: 0.8,
   siteDashes: '4 1.2 0.8 1.2',
   proposal: 0.9,
-  receptor: 0.8,
   frame: 0.8,
 };
 
@@ -254,6 +264,7 @@ function drawShadows(
 
 function drawSheetText(
   content: PlanContent,
+  streetsOnSheet: { name: string; lines: SheetPoint[][] }[],
   frame: Frame,
   proposal: { rings: SheetRing[]; topM: number }[],
   keys: { rings: SheetRing[]; mark: string }[],
@@ -268,25 +279,36 @@ function drawSheetText(
     width: block.width,
     height: block.height,
   };
-  const northBox = { x: 0, y: frame.height - 74, width: 190, height: 74 };
+  const scaleBarLongest = 90;
+  const northBox = { x: 1, y: frame.height - 68, width: scaleBarLongest + 84, height: 67 };
   const taken = [northBox, ...(options.titleBlock.length === 0 ? [] : [blockBox])];
   const heights = drawBlockHeights(proposal, frame, options.figures, taken);
   const marks = drawKeys(keys, frame, [...taken, ...heights.boxes]);
-  const names = drawNames(content, frame, [...taken, ...heights.boxes, ...marks.boxes]);
+  const streets = drawStreetNames(streetsOnSheet, frame, [
+    ...taken,
+    ...heights.boxes,
+    ...marks.boxes,
+  ]);
+  const names = drawAreaNames([...content.water, ...content.openSpace], frame, [
+    ...taken,
+    ...heights.boxes,
+    ...marks.boxes,
+    ...streets.boxes,
+  ]);
   return [
+    ...streets.drawn,
     ...names.drawn,
     ...marks.drawn,
     ...heights.drawn,
-    element('rect', {
-      x: margin - 4,
-      y: frame.height - 70,
-      width: 176,
-      height: 64,
-      fill: palette.paper,
-      'fill-opacity': 0.85,
-    }),
-    drawNorth([margin + 22, frame.height - 16], 34, fontSize),
-    drawScaleBar([margin + 58, frame.height - 20], frame.pxPerM, 100, fontSize, options.figures),
+    element('rect', { ...northBox, fill: palette.paper, 'fill-opacity': 0.85 }),
+    drawNorth([northBox.x + 24, frame.height - 16], 34, fontSize),
+    drawScaleBar(
+      [northBox.x + 60, frame.height - 18],
+      frame.pxPerM,
+      scaleBarLongest,
+      fontSize,
+      options.figures,
+    ),
     ...(options.titleBlock.length === 0
       ? []
       : [drawTitleBlock(options.titleBlock, [blockBox.x, blockBox.y], fontSize)]),

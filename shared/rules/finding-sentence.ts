@@ -50,7 +50,7 @@ export function sayValue(measure: MeasureKind, value: number): string {
 }
 
 const measureWords: Record<MeasureKind, string> = {
-  'sun-hours': 'sun in the judged hours, as a mean over its area',
+  'sun-hours': 'sun in the judged hours',
   'best-run': 'unbroken sun in the judged hours',
   'shade-share': 'its area in shade at the worst judged instant',
   'sun-area-hours': 'sunlit area times hours in the judged time',

@@ -1,5 +1,5 @@
 import { boxOfRings, type Box, type Ring } from '../geometry/ring.ts';
-import type { BlockShadow, ShadowLayer, ShadowRole } from './shadow-layer.ts';
+import type { BlockShadow, ShadowLayer } from './shadow-layer.ts';
 import { createWindingSweep, type MeasureAreas, type SweepLayer } from './winding-sweep.ts';
 
 /** A place to be judged: its rings on the local plane, cut where they lie inside the site. */
@@ -59,7 +59,8 @@ function openAreaM2(
       { counter: counters.context, rings: contextFootprints },
     ],
     area.box,
-    (windings) => (inside(windings, 'area') && !inside(windings, 'context') ? 0 : -1),
+    (windings) =>
+      isInside(windings, counters.area) && !isInside(windings, counters.context) ? 0 : -1,
     areas,
   );
   return areas[0] ?? 0;
@@ -84,15 +85,15 @@ function sweepLayerOf({ role, contours }: BlockShadow): SweepLayer {
 }
 
 function outcomeOf(windings: Int32Array): number {
-  if (!inside(windings, 'area') || inside(windings, 'context')) return -1;
-  const shadedBefore = inside(windings, 'existing');
-  const shadedAfter = inside(windings, 'proposed');
+  if (!isInside(windings, counters.area) || isInside(windings, counters.context)) return -1;
+  const shadedBefore = isInside(windings, counters.existing);
+  const shadedAfter = isInside(windings, counters.proposed);
   if (!shadedBefore && !shadedAfter) return outcomes.sunInBoth;
   if (shadedAfter && !shadedBefore) return outcomes.netNew;
   if (shadedBefore && !shadedAfter) return outcomes.removed;
   return -1;
 }
 
-function inside(windings: Int32Array, counter: 'area' | ShadowRole): boolean {
-  return (windings[counters[counter]] ?? 0) > 0;
+function isInside(windings: Int32Array, counter: number): boolean {
+  return (windings[counter] ?? 0) > 0;
 }

@@ -8,8 +8,8 @@ export interface SweepEdges {
   highX: Float64Array;
   highY: Float64Array;
   /** +1 where the ring runs upward, −1 where it runs downward. */
-  winding: Int8Array;
-  counter: Uint8Array;
+  winding: Int32Array;
+  counter: Int32Array;
 }
 
 export function createSweepEdges(capacity = 256): SweepEdges {
@@ -19,8 +19,8 @@ export function createSweepEdges(capacity = 256): SweepEdges {
     lowY: new Float64Array(capacity),
     highX: new Float64Array(capacity),
     highY: new Float64Array(capacity),
-    winding: new Int8Array(capacity),
-    counter: new Uint8Array(capacity),
+    winding: new Int32Array(capacity),
+    counter: new Int32Array(capacity),
   };
 }
 
@@ -55,8 +55,6 @@ function addEdge(
   const topY = Math.min(highY, box.maxY);
   const bottomX = bottomY === lowY ? lowX : lowX + (bottomY - lowY) * slope;
   const topX = topY === highY ? highX : lowX + (topY - lowY) * slope;
-  const heightAt = (x: number) => Math.min(Math.max(lowY + (x - lowX) / slope, bottomY), topY);
-
   if (bottomX >= box.maxX && topX >= box.maxX) return;
   if (bottomX <= box.minX && topX <= box.minX) {
     push(edges, box.minX, bottomY, box.minX, topY, winding, counter);
@@ -68,21 +66,33 @@ function addEdge(
   let toY = topY;
   if (bottomX < box.minX) {
     fromX = box.minX;
-    fromY = heightAt(box.minX);
+    fromY = heightAt(box.minX, lowX, lowY, slope, bottomY, topY);
     push(edges, box.minX, bottomY, box.minX, fromY, winding, counter);
   } else if (topX < box.minX) {
     toX = box.minX;
-    toY = heightAt(box.minX);
+    toY = heightAt(box.minX, lowX, lowY, slope, bottomY, topY);
     push(edges, box.minX, toY, box.minX, topY, winding, counter);
   }
   if (bottomX > box.maxX) {
     fromX = box.maxX;
-    fromY = heightAt(box.maxX);
+    fromY = heightAt(box.maxX, lowX, lowY, slope, bottomY, topY);
   } else if (topX > box.maxX) {
     toX = box.maxX;
-    toY = heightAt(box.maxX);
+    toY = heightAt(box.maxX, lowX, lowY, slope, bottomY, topY);
   }
   push(edges, fromX, fromY, toX, toY, winding, counter);
+}
+
+/** Where an edge crosses an upright line, kept between its two ends. */
+function heightAt(
+  x: number,
+  lowX: number,
+  lowY: number,
+  slope: number,
+  bottomY: number,
+  topY: number,
+): number {
+  return Math.min(Math.max(lowY + (x - lowX) / slope, bottomY), topY);
 }
 
 function push(

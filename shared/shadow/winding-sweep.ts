@@ -10,87 +10,120 @@ export interface SweepLayer {
 /** Given the winding number of each counter: the index of the area to which a region belongs, or −1. */
 export type Classify = (windings: Int32Array) => number;
 
+/** Adds to `areas` (m²) the regions inside the box, told apart by `classify`. */
+export type MeasureAreas = (
+  layers: readonly SweepLayer[],
+  box: Box,
+  classify: Classify,
+  areas: Float64Array,
+) => void;
+
 /**
  * Makes a measure of areas under winding numbers: a sweep over horizontal strips that never builds
  * a polygon, so that nothing can break; rounding moves an area by about 1e-11 m².
  *
  * Between two neighbouring heights at which edges begin, end or cross, the edges stand in a fixed
  * order from left to right, and between two of them each winding number is constant: the regions
- * are trapezoids, the last of them up to the box's right side. An upward edge of a counter-clockwise ring has the solid on its left, so a walk
- * from left to right loses one at it and gains one at a downward edge.
+ * are trapezoids, the last of them up to the box's right side. An upward edge of a
+ * counter-clockwise ring has the solid on its left, so a walk from left to right loses one at it
+ * and gains one at a downward edge.
  *
  * The measure keeps its scratch memory from call to call: make one for each study.
  *
  * @param counterCount how many counters the layers use
  */
-export function createWindingSweep(counterCount: number) {
+export function createWindingSweep(counterCount: number): MeasureAreas {
   const edges = createSweepEdges();
   const windings = new Int32Array(counterCount);
-  const strip = createStrip();
+  let strip = createStrip(64);
 
-  /** Adds to `areas` (m²) the regions inside the box, told apart by `classify`. */
-  return function measureAreas(
-    layers: readonly SweepLayer[],
-    box: Box,
-    classify: Classify,
-    areas: Float64Array,
-  ): void {
+  return (layers, box, classify, areas) => {
     edges.count = 0;
     for (const { counter, rings } of layers) {
       for (const ring of rings) addRing(edges, ring, counter, box);
     }
     if (edges.count === 0) return;
+    if (strip.edge.length < edges.count) strip = createStrip(edges.count * 2);
 
     const heights = stripHeights(edges);
-    const byLowEnd = Uint32Array.from({ length: edges.count }, (_, edge) => edge).sort(
-      (a, b) => at(edges.lowY, a) - at(edges.lowY, b),
-    );
+    const byLowEnd = edgesByLowEnd(edges);
     let waiting = 0;
-    let active: number[] = [];
+    strip.count = 0;
     for (let index = 0; index + 1 < heights.length; index += 1) {
-      const bottomY = at(heights, index);
-      const topY = at(heights, index + 1);
-      active = active.filter((edge) => at(edges.highY, edge) > bottomY);
-      while (waiting < byLowEnd.length && at(edges.lowY, at(byLowEnd, waiting)) <= bottomY) {
-        active.push(at(byLowEnd, waiting));
+      const bottomY = real(heights, index);
+      const topY = real(heights, index + 1);
+      dropEnded(strip, edges, bottomY);
+      while (waiting < byLowEnd.length) {
+        const edge = whole(byLowEnd, waiting);
+        if (real(edges.lowY, edge) > bottomY) break;
+        strip.edge[strip.count] = edge;
+        strip.count += 1;
         waiting += 1;
       }
-      fillStrip(strip, edges, active, bottomY, topY);
+      placeEdges(strip, edges, bottomY, topY);
       sweepStrip(strip, edges, box, topY - bottomY, windings, classify, areas);
     }
   };
 }
 
-export type MeasureAreas = ReturnType<typeof createWindingSweep>;
-
-/** The edges of one strip, with the places at which they enter it below and leave it above. */
+/**
+ * The edges of one strip from left to right at its lower side, with the places at which they enter
+ * it below and leave it above. The next strip finds them nearly sorted.
+ */
 interface Strip {
   count: number;
-  order: number[];
-  edge: number[];
-  bottomX: number[];
-  topX: number[];
+  edge: Int32Array;
+  bottomX: Float64Array;
+  topX: Float64Array;
+  /** Indices into the three above, in the order of a part of the strip. */
+  order: Int32Array;
+  middleX: Float64Array;
 }
 
-function createStrip(): Strip {
-  return { count: 0, order: [], edge: [], bottomX: [], topX: [] };
+function createStrip(capacity: number): Strip {
+  return {
+    count: 0,
+    edge: new Int32Array(capacity),
+    bottomX: new Float64Array(capacity),
+    topX: new Float64Array(capacity),
+    order: new Int32Array(capacity),
+    middleX: new Float64Array(capacity),
+  };
 }
 
-function fillStrip(
-  strip: Strip,
-  edges: SweepEdges,
-  active: readonly number[],
-  bottomY: number,
-  topY: number,
-): void {
-  strip.count = active.length;
-  strip.order.length = active.length;
-  active.forEach((edge, index) => {
-    strip.order[index] = index;
-    strip.edge[index] = edge;
-    strip.bottomX[index] = xAt(edges, edge, bottomY);
-    strip.topX[index] = xAt(edges, edge, topY);
-  });
+function dropEnded(strip: Strip, edges: SweepEdges, bottomY: number): void {
+  let kept = 0;
+  for (let index = 0; index < strip.count; index += 1) {
+    const edge = whole(strip.edge, index);
+    if (real(edges.highY, edge) > bottomY) {
+      strip.edge[kept] = edge;
+      kept += 1;
+    }
+  }
+  strip.count = kept;
+}
+
+/** Works out where each edge crosses the strip, and sorts them by insertion. */
+function placeEdges(strip: Strip, edges: SweepEdges, bottomY: number, topY: number): void {
+  const { edge, bottomX, topX } = strip;
+  for (let index = 0; index < strip.count; index += 1) {
+    const moved = whole(edge, index);
+    const movedBottom = xAt(edges, moved, bottomY);
+    const movedTop = xAt(edges, moved, topY);
+    let place = index;
+    while (place > 0) {
+      const beforeBottom = real(bottomX, place - 1);
+      if (beforeBottom < movedBottom) break;
+      if (beforeBottom === movedBottom && real(topX, place - 1) <= movedTop) break;
+      edge[place] = whole(edge, place - 1);
+      bottomX[place] = beforeBottom;
+      topX[place] = real(topX, place - 1);
+      place -= 1;
+    }
+    edge[place] = moved;
+    bottomX[place] = movedBottom;
+    topX[place] = movedTop;
+  }
 }
 
 function sweepStrip(
@@ -102,74 +135,92 @@ function sweepStrip(
   classify: Classify,
   areas: Float64Array,
 ): void {
-  const cuts = crossingShares(strip);
+  for (let index = 0; index < strip.count; index += 1) strip.order[index] = index;
   let fromShare = 0;
-  for (const toShare of cuts) {
+  for (const toShare of crossingShares(strip)) {
     if (toShare <= fromShare) continue;
-    addTrapezoids(strip, edges, box, heightM, fromShare, toShare, windings, classify, areas);
+    placeMiddles(strip, (fromShare + toShare) / 2);
+    addTrapezoids(strip, edges, box, heightM * (toShare - fromShare), windings, classify, areas);
     fromShare = toShare;
   }
-  addTrapezoids(strip, edges, box, heightM, fromShare, 1, windings, classify, areas);
+  placeMiddles(strip, (fromShare + 1) / 2);
+  addTrapezoids(strip, edges, box, heightM * (1 - fromShare), windings, classify, areas);
 }
 
-/** The shares of the strip's height at which two of its edges cross, rising. Sorts `order` by the bottom. */
-function crossingShares({ count, order, bottomX, topX }: Strip): number[] {
-  order.sort((a, b) => at(bottomX, a) - at(bottomX, b) || at(topX, a) - at(topX, b));
+const noShares: readonly number[] = [];
+
+/** The shares of the strip's height at which two of its edges cross, rising. */
+function crossingShares({ count, topX, bottomX, order }: Strip): readonly number[] {
+  let isSorted = true;
+  for (let index = 1; index < count && isSorted; index += 1) {
+    isSorted = real(topX, index - 1) <= real(topX, index);
+  }
+  if (isSorted) return noShares;
   const shares: number[] = [];
-  const byTop = order.slice();
-  // An insertion sort by the top swaps exactly the pairs that cross within the strip.
+  // An insertion sort by the upper side swaps exactly the pairs that cross within the strip.
   for (let index = 1; index < count; index += 1) {
-    const moved = at(byTop, index);
-    const movedTop = at(topX, moved);
+    const moved = whole(order, index);
+    const movedTop = real(topX, moved);
     let place = index;
-    for (; place > 0 && at(topX, at(byTop, place - 1)) > movedTop; place -= 1) {
-      const passed = at(byTop, place - 1);
-      const gapBottom = at(bottomX, moved) - at(bottomX, passed);
-      const gapTop = at(topX, passed) - movedTop;
+    while (place > 0) {
+      const passed = whole(order, place - 1);
+      const gapTop = real(topX, passed) - movedTop;
+      if (gapTop <= 0) break;
+      const gapBottom = real(bottomX, moved) - real(bottomX, passed);
       if (gapBottom > 0) shares.push(gapBottom / (gapBottom + gapTop));
-      byTop[place] = passed;
+      order[place] = passed;
+      place -= 1;
     }
-    byTop[place] = moved;
+    order[place] = moved;
   }
   return shares.sort((a, b) => a - b);
 }
 
+/** Sorts `order` by the places at a share of the strip's height, in `middleX`. */
+function placeMiddles({ count, order, bottomX, topX, middleX }: Strip, share: number): void {
+  for (let index = 0; index < count; index += 1) {
+    const bottom = real(bottomX, index);
+    middleX[index] = bottom + (real(topX, index) - bottom) * share;
+  }
+  for (let index = 1; index < count; index += 1) {
+    const moved = whole(order, index);
+    const movedX = real(middleX, moved);
+    let place = index;
+    while (place > 0) {
+      const passed = whole(order, place - 1);
+      if (real(middleX, passed) <= movedX) break;
+      order[place] = passed;
+      place -= 1;
+    }
+    order[place] = moved;
+  }
+}
+
+/** Adds a part of a strip in which no edges cross: a trapezoid's mean width is that half way up. */
 function addTrapezoids(
-  strip: Strip,
+  { count, edge, order, middleX }: Strip,
   edges: SweepEdges,
   box: Box,
   heightM: number,
-  fromShare: number,
-  toShare: number,
   windings: Int32Array,
   classify: Classify,
   areas: Float64Array,
 ): void {
-  const { order, edge, bottomX, topX, count } = strip;
-  const middle = (fromShare + toShare) / 2;
-  // The mean width of a trapezoid is its width half way up.
-  const middleX = (index: number) => {
-    const bottom = at(bottomX, index);
-    return bottom + (at(topX, index) - bottom) * middle;
-  };
-  if (fromShare > 0 || toShare < 1) order.sort((a, b) => middleX(a) - middleX(b));
   windings.fill(0);
-  const partM = heightM * (toShare - fromShare);
   let previousX = box.minX;
-  const addUpTo = (x: number) => {
-    if (x <= previousX) return;
-    const area = classify(windings);
-    if (area >= 0) areas[area] = at(areas, area) + (x - previousX) * partM;
-    previousX = x;
-  };
-  for (let index = 0; index < count; index += 1) {
-    const current = at(order, index);
-    addUpTo(middleX(current));
-    const edgeIndex = at(edge, current);
-    const counter = at(edges.counter, edgeIndex);
-    windings[counter] = at(windings, counter) - at(edges.winding, edgeIndex);
+  for (let index = 0; index <= count; index += 1) {
+    const x = index < count ? real(middleX, whole(order, index)) : box.maxX;
+    if (x > previousX) {
+      const area = classify(windings);
+      if (area >= 0) areas[area] = real(areas, area) + (x - previousX) * heightM;
+      previousX = x;
+    }
+    if (index < count) {
+      const current = whole(edge, whole(order, index));
+      const counter = whole(edges.counter, current);
+      windings[counter] = whole(windings, counter) - whole(edges.winding, current);
+    }
   }
-  addUpTo(box.maxX);
 }
 
 /** The heights at which edges begin or end, rising, each once. */
@@ -178,9 +229,10 @@ function stripHeights(edges: SweepEdges): Float64Array {
   heights.set(edges.lowY.subarray(0, edges.count));
   heights.set(edges.highY.subarray(0, edges.count), edges.count);
   heights.sort();
-  let kept = 0;
-  for (const height of heights) {
-    if (kept === 0 || height > at(heights, kept - 1)) {
+  let kept = 1;
+  for (let index = 1; index < heights.length; index += 1) {
+    const height = real(heights, index);
+    if (height > real(heights, kept - 1)) {
       heights[kept] = height;
       kept += 1;
     }
@@ -188,20 +240,23 @@ function stripHeights(edges: SweepEdges): Float64Array {
   return heights.subarray(0, kept);
 }
 
+function edgesByLowEnd(edges: SweepEdges): Int32Array {
+  const sorted = new Int32Array(edges.count);
+  for (let index = 0; index < sorted.length; index += 1) sorted[index] = index;
+  return sorted.sort((a, b) => real(edges.lowY, a) - real(edges.lowY, b));
+}
+
 function xAt(edges: SweepEdges, edge: number, y: number): number {
-  const lowY = at(edges.lowY, edge);
-  const highY = at(edges.highY, edge);
-  const lowX = at(edges.lowX, edge);
-  const highX = at(edges.highX, edge);
+  const lowY = real(edges.lowY, edge);
+  const lowX = real(edges.lowX, edge);
   if (y <= lowY) return lowX;
+  const highY = real(edges.highY, edge);
+  const highX = real(edges.highX, edge);
   if (y >= highY) return highX;
   return lowX + ((highX - lowX) * (y - lowY)) / (highY - lowY);
 }
 
-/** An element that the sweep's own bookkeeping guarantees to exist. */
-function at(numbers: ArrayLike<number>, index: number): number {
-  const value = numbers[index];
-  if (value === undefined)
-    {throw new RangeError(`The sweep looked beyond its ${numbers.length} edges.`);}
-  return value;
-}
+// One reader for each kind of array keeps the hot loops on one type. The sweep's own counts keep
+// every index inside its array.
+const real = (numbers: Float64Array, index: number): number => numbers[index] ?? NaN;
+const whole = (numbers: Int32Array, index: number): number => numbers[index] ?? 0;

@@ -1,5 +1,5 @@
 import type { Clipper } from '../shadow/clipper.ts';
-import { planClauses } from './clause-plan.ts';
+import { planClauses, type ClausePlan } from './clause-plan.ts';
 import { crossCheckReceptors, type CrossCheck } from './cross-check.ts';
 import { digestOf } from './digest.ts';
 import { drawInstant, type InstantShadowPolygons } from './draw-instant.ts';
@@ -35,67 +35,105 @@ export type { InstantShadowPolygons };
  */
 export async function computeStudy(
   input: StudyInput,
-  { clipper, onProgress }: ComputeStudyOptions,
+  options: ComputeStudyOptions,
 ): Promise<ComputedStudy> {
   const scene = buildScene(input);
   const plans = planClauses(input, scene);
   const judge = createStudyJudge(plans, input);
-  const cumulativeJudge = scene.cumulativeBlocks === null ? null : createStudyJudge(plans, input);
+  const { cumulativeBlocks } = scene;
+  const cumulativeJudge = cumulativeBlocks === null ? null : createStudyJudge(plans, input);
   const listed = listedInstants(input);
-  const byInstant = instantsByMs(listed, plans);
-  const check: CrossCheck = { largestDifferenceM2: 0, at: null, receptor: null };
-  const shadows: InstantShadowPolygons[] = [];
-  const instants = new Map<string, StudyInstant>();
-  const receptorRows = scene.receptors.map((): ReceptorResult['instants'] => []);
-
-  let done = 0;
-  for (const [atMs, wanted] of byInstant) {
-    const instant = lightAtInstant(scene, scene.blocks, input, atMs);
-    for (const date of wanted.judgedDates) judge.take(date, instant);
-    if (cumulativeJudge !== null && scene.cumulativeBlocks !== null) {
-      const cumulative = lightAtInstant(scene, scene.cumulativeBlocks, input, atMs);
-      for (const date of wanted.judgedDates) cumulativeJudge.take(date, cumulative);
-    }
-    for (const at of wanted.listed) {
-      instants.set(at, studyInstant(at, instant, scene));
-      scene.receptors.forEach((receptor, index) => {
-        receptorRows[index]?.push(receptorInstant(at, instant, receptor));
-      });
-    }
-    const [firstListed] = wanted.listed;
-    if (firstListed !== undefined) {
-      const drawn = drawInstant(clipper, scene, instant, firstListed);
-      if (drawn !== null) {
-        shadows.push(drawn.shadows);
-        crossCheckReceptors(clipper, scene, instant, firstListed, drawn.polygons, check);
-      }
-    }
-    done += 1;
-    await onProgress?.(done, byInstant.size);
-  }
-
+  const light = await computeLight(input, scene, listed, plans, options, (instant, dates) => {
+    for (const date of dates) judge.take(date, instant);
+    if (cumulativeJudge === null || cumulativeBlocks === null || dates.length === 0) return;
+    const cumulative = lightAtInstant(scene, cumulativeBlocks, input, instant.atMs);
+    for (const date of dates) cumulativeJudge.take(date, cumulative);
+  });
   const { results, findings } = judge.judge();
-  const inputOrder = new Map(listed.map((at, index) => [at, index]));
-  const inOrder = <Row extends { at: string }>(rows: Row[]) =>
-    rows.sort((a, b) => (inputOrder.get(a.at) ?? 0) - (inputOrder.get(b.at) ?? 0));
   const evidence = {
     ...input,
     engine: engineVersion,
     instants: listed,
     results: {
-      instants: inOrder([...instants.values()]),
-      receptors: scene.receptors.map((receptor, index) => ({
-        id: receptor.id,
-        openArea: roundArea(receptor.openAreaM2),
-        instants: inOrder(receptorRows[index] ?? []),
+      instants: light.instants,
+      receptors: light.receptors.map((receptor) => ({
+        ...receptor,
         clauses: results.get(receptor.id) ?? [],
       })),
       findings,
       ...(cumulativeJudge === null ? {} : { cumulative: cumulativeJudge.judge().findings }),
-      check,
+      check: light.check,
     },
   };
-  return { evidence: { ...evidence, digest: digestOf(evidence) }, shadows };
+  return { evidence: { ...evidence, digest: digestOf(evidence) }, shadows: light.shadows };
+}
+
+/** The light of listed instants without any judgement, for a look at single instants. */
+export interface ListedLight {
+  instants: StudyInstant[];
+  receptors: Omit<ReceptorResult, 'clauses'>[];
+  shadows: InstantShadowPolygons[];
+  check: CrossCheck;
+}
+
+/** Computes the listed instants of an input alone, in the order given; nothing is judged. */
+export async function computeListedInstants(
+  input: StudyInput,
+  options: ComputeStudyOptions,
+): Promise<ListedLight> {
+  return computeLight(
+    input,
+    buildScene(input),
+    listedInstants(input),
+    [],
+    options,
+    () => undefined,
+  );
+}
+
+async function computeLight(
+  input: StudyInput,
+  scene: Scene,
+  listed: readonly string[],
+  plans: readonly ClausePlan[],
+  { clipper, onProgress }: ComputeStudyOptions,
+  takeJudged: (instant: InstantLight, dates: readonly string[]) => void,
+): Promise<ListedLight> {
+  const byInstant = instantsByMs(listed, plans);
+  const check: CrossCheck = { largestDifferenceM2: 0, at: null, receptor: null };
+  const shadows: InstantShadowPolygons[] = [];
+  const instants: StudyInstant[] = [];
+  const receptorRows = scene.receptors.map((): ReceptorResult['instants'] => []);
+  let done = 0;
+  for (const [atMs, wanted] of byInstant) {
+    const instant = lightAtInstant(scene, scene.blocks, input, atMs);
+    takeJudged(instant, wanted.judgedDates);
+    for (const at of wanted.listed) {
+      instants.push(studyInstant(at, instant, scene));
+      scene.receptors.forEach((receptor, index) => {
+        receptorRows[index]?.push(receptorInstant(at, instant, receptor));
+      });
+      const drawn = drawInstant(clipper, scene, instant, at);
+      if (drawn === null) continue;
+      shadows.push(drawn.shadows);
+      crossCheckReceptors(clipper, scene, instant, at, drawn.polygons, check);
+    }
+    done += 1;
+    await onProgress?.(done, byInstant.size);
+  }
+  const place = new Map(listed.map((at, index) => [at, index]));
+  const inOrder = <Row extends { at: string }>(rows: Row[]) =>
+    rows.sort((a, b) => (place.get(a.at) ?? 0) - (place.get(b.at) ?? 0));
+  return {
+    instants: inOrder(instants),
+    receptors: scene.receptors.map((receptor, index) => ({
+      id: receptor.id,
+      openArea: roundArea(receptor.openAreaM2),
+      instants: inOrder(receptorRows[index] ?? []),
+    })),
+    shadows: inOrder(shadows),
+    check,
+  };
 }
 
 function listedInstants(input: StudyInput): string[] {
@@ -111,7 +149,7 @@ interface WantedInstant {
 /** Every instant to compute, once, in the order of time. */
 function instantsByMs(
   listed: readonly string[],
-  plans: ReturnType<typeof planClauses>,
+  plans: readonly ClausePlan[],
 ): Map<number, WantedInstant> {
   const wanted = new Map<number, { listed: Set<string>; judgedDates: Set<string> }>();
   const at = (atMs: number) => {

@@ -1,5 +1,6 @@
 import { createIssue, wholeFile } from '../issue-severities.ts';
 import type { MassingIssue } from '../massing-issue.ts';
+import { findJsonError } from './find-json-error.ts';
 
 /** GeoJSON needs 8 levels (a MultiPolygon in a collection); what nests far deeper is no drawing. */
 const deepestNesting = 64;
@@ -26,10 +27,10 @@ export function parseJsonDocument(bytes: Uint8Array, fileName: string): JsonDocu
   try {
     const value: unknown = JSON.parse(text);
     return { ok: true, value };
-  } catch (error) {
+  } catch {
     return refuse(
       'MASSING_JSON_INVALID',
-      `${fileName} is not valid JSON${placeOf(error, text)}.`,
+      `${fileName} is not valid JSON (${describePlace(text, findJsonError(text) ?? text.length)}).`,
       /[\s:,[](NaN|-?Infinity)\b/.test(text)
         ? 'It holds NaN or Infinity, which JSON does not know: give every coordinate and height a number.'
         : 'Export it again; it may have been cut off or edited by hand.',
@@ -71,12 +72,9 @@ function nestingDepth(bytes: Uint8Array): number {
   return deepest;
 }
 
-/** Line and column, where the engine's message tells a position. */
-function placeOf(error: unknown, text: string): string {
-  const position = /position (\d+)/.exec(error instanceof Error ? error.message : '')?.[1];
-  if (position === undefined) return '';
-  const lines = text.slice(0, Number(position)).split('\n');
-  return ` (line ${lines.length}, column ${(lines.at(-1)?.length ?? 0) + 1})`;
+function describePlace(text: string, position: number): string {
+  const lines = text.slice(0, position).split('\n');
+  return `line ${lines.length}, column ${(lines.at(-1)?.length ?? 0) + 1}`;
 }
 
 export function isRecord(value: unknown): value is Record<string, unknown> {
