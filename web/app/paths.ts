@@ -12,7 +12,7 @@ export const paths = {
   method: { path: '/method', href: () => '/method' },
   publicCase: {
     path: '/cases/:reference',
-    href: (reference: string, search?: { parcel?: string; at?: string }) =>
+    href: (reference: string, search?: { receptor?: string }) =>
       withSearch(`/cases/${reference}`, search),
   },
   applications: { path: '/applications', href: () => '/applications' },

@@ -28,6 +28,12 @@ export const router = createBrowserRouter([
             lazy: async () => ({ Component: (await import('./pages/method-page.tsx')).MethodPage }),
           },
           {
+            path: paths.adminRules.path,
+            lazy: async () => ({
+              Component: (await import('./pages/admin-rules-page.tsx')).AdminRulesPage,
+            }),
+          },
+          {
             path: paths.signIn.path,
             lazy: async () => ({
               Component: (await import('./pages/sign-in-page.tsx')).SignInPage,
@@ -75,15 +81,7 @@ export const router = createBrowserRouter([
           },
           {
             element: <RequireRole roles={['planner', 'administrator']} />,
-            children: [
-              ...deskRoutes,
-              {
-                path: paths.adminRules.path,
-                lazy: async () => ({
-                  Component: (await import('./pages/admin-rules-page.tsx')).AdminRulesPage,
-                }),
-              },
-            ],
+            children: deskRoutes,
           },
           { path: '*', element: <NotFoundPage /> },
         ],

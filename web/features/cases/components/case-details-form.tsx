@@ -31,7 +31,10 @@ export function CaseDetailsForm({
     resolver: zodResolver(createCaseInputSchema),
     defaultValues: initial,
   });
-  const parcels = useController({ control, name: 'siteParcels' });
+  const {
+    field: { ref: parcelsRef, value: picked, onChange: setPicked },
+    fieldState: { error: parcelsError },
+  } = useController({ control, name: 'siteParcels' });
   const send = handleSubmit((input) => onSubmit(input));
   return (
     <form noValidate className="grid gap-6" onSubmit={(event) => void send(event)}>
@@ -51,14 +54,14 @@ export function CaseDetailsForm({
           optional
         />
       </div>
-      <fieldset className="grid gap-3" ref={parcels.field.ref} tabIndex={-1}>
+      <fieldset className="grid gap-3" ref={parcelsRef} tabIndex={-1}>
         <legend className="pb-1 font-strong">Parcels of the site</legend>
-        {parcels.fieldState.error === undefined ? null : (
+        {parcelsError === undefined ? null : (
           <p role="alert" className="text-small font-strong text-madder">
-            ✕ {parcels.fieldState.error.message}
+            ✕ {parcelsError.message}
           </p>
         )}
-        {renderParcels(parcels.field.value, parcels.field.onChange)}
+        {renderParcels(picked, setPicked)}
       </fieldset>
       {error === null ? null : <ProblemNotice error={error} />}
       <div className="flex flex-wrap gap-3">

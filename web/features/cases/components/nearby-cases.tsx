@@ -27,7 +27,7 @@ export function NearbyCases({ parcels, cases }: NearbyCasesProps) {
             {nearestCases(parcel, cases).map(({ reviewCase, distanceM }) => (
               <li key={reviewCase.reference}>
                 <Link
-                  to={paths.publicCase.href(reviewCase.reference, { parcel: parcel.number })}
+                  to={paths.publicCase.href(reviewCase.reference, { receptor: parcel.number })}
                   className="link"
                 >
                   What {reviewCase.title} changes here

@@ -6,8 +6,8 @@ export function compareMassingsQueryOptions(reference: string, from: number, to:
   return queryOptions({
     queryKey: ['cases', reference, 'massings', 'comparison', from, to],
     queryFn: ({ signal }) =>
-      callApi(massingComparisonSchema, `/cases/${reference}/massings/${to}/comparison`, {
-        query: { from },
+      callApi(massingComparisonSchema, `/cases/${reference}/massings/comparison`, {
+        query: { from, to },
         signal,
       }),
     staleTime: Infinity,

@@ -1,0 +1,29 @@
+import type { FindingRow } from '../../../shared/contracts/studies.ts';
+import type { MapBlock, MapReceptor } from '../../map/map-features.ts';
+import type { DrawnEvidence } from './api/get-study-evidence.ts';
+import { worstFinding } from './sun-losers.ts';
+
+/** The site's blocks of a study as the map draws them; what stands around comes with the base map. */
+export function mapBlocksOf(evidence: DrawnEvidence): MapBlock[] {
+  return evidence.blocks.features.flatMap(({ properties, geometry }): MapBlock[] =>
+    properties.role === 'proposed' || properties.role === 'existing'
+      ? [{ id: properties.id, role: properties.role, topM: properties.top, geometry }]
+      : [],
+  );
+}
+
+/** Every receptor of a study with the worst of its findings. */
+export function mapReceptorsOf(
+  evidence: DrawnEvidence,
+  rows: readonly FindingRow[],
+): MapReceptor[] {
+  const findings = new Map<string, FindingRow['finding'][]>();
+  for (const { receptor, finding } of rows) {
+    findings.set(receptor, [...(findings.get(receptor) ?? []), finding]);
+  }
+  return evidence.receptors.features.map(({ properties, geometry }) => ({
+    ...properties,
+    finding: worstFinding(findings.get(properties.id) ?? []),
+    geometry,
+  }));
+}
