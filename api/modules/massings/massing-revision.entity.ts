@@ -1,8 +1,8 @@
 import { randomUUID } from 'node:crypto';
 import { defineEntity, p } from '@mikro-orm/core';
 import type { InferEntity } from '@mikro-orm/core';
-import type { MassingFigures } from '../../../shared/massing/massing-figures.ts';
 import type { MassingBlock } from '../../../shared/massing/massing-block.ts';
+import type { MassingFigures } from '../../../shared/massing/massing-figures.ts';
 import type { MassingIssue } from '../../../shared/massing/massing-issue.ts';
 import { ReviewCase } from '../cases/review-case.entity.ts';
 import { Person } from '../people/person.entity.ts';
@@ -21,14 +21,14 @@ export const MassingRevision = defineEntity({
     revision: p.integer(),
     fileName: p.string().length(255),
     /** The bytes as sent. */
-    original: p.blob().lazy().ref(),
+    original: p.blob().lazy(true, false),
     /** SHA-256 of the original bytes, hexadecimal. */
     sha256: p.string().length(64),
     sizeBytes: p.integer(),
     uploadedBy: () => p.manyToOne(Person),
     createdAt: p.datetime(3),
     issues: p.json<MassingIssue[]>(),
-    blocks: p.json<MassingBlock[]>().lazy().ref(),
+    blocks: p.json<MassingBlock[]>().lazy(true, false),
     figures: p.json<MassingFigures>(),
     /** No issue is an error. */
     sound: p.boolean(),

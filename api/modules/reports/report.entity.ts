@@ -26,13 +26,13 @@ export const Report = defineEntity({
     studyDigest: p.string().length(71),
     issuedBy: () => p.manyToOne(Person),
     issuedAt: p.datetime(3),
-    pdf: p.blob().lazy().ref(),
+    pdf: p.blob().lazy(true, false),
     sizeBytes: p.integer(),
     pages: p.integer(),
     /** SHA-256 of the PDF, hexadecimal. */
     sha256: p.string().length(64),
     /** What the PDF was drawn from. */
-    payload: p.json<ReportPayload>().lazy().ref(),
+    payload: p.json<ReportPayload>().lazy(true, false),
   },
 });
 export type Report = InferEntity<typeof Report>;

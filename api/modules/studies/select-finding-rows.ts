@@ -4,6 +4,7 @@ import type {
   FindingRow,
   listFindingsQuerySchema,
 } from '../../../shared/contracts/studies.ts';
+import { parseSort } from '../../paging.ts';
 
 export type FindingsQuery = z.output<typeof listFindingsQuerySchema>;
 
@@ -13,17 +14,8 @@ const findingOrder = { 'not-met': 0, disregarded: 1, met: 2, 'not-affected': 3 }
 type Compare = (one: FindingRow, other: FindingRow) => number;
 
 const byText = (one: string, other: string) => one.localeCompare(other, 'en', { numeric: true });
-/** Nothing comes after every number, in whichever direction the column is sorted. */
-const byLoss =
-  (direction: 1 | -1): Compare =>
-  (one, other) => {
-    if (one.loss === null || other.loss === null) {
-      return Number(one.loss === null) - Number(other.loss === null);
-    }
-    return direction * (one.loss - other.loss);
-  };
 
-const comparisons: Record<string, Compare> = {
+const comparisons = {
   receptor: (one, other) => byText(one.receptor, other.receptor),
   label: (one, other) => byText(one.label, other.label),
   class: (one, other) => byText(one.class, other.class),
@@ -34,36 +26,48 @@ const comparisons: Record<string, Compare> = {
   after: (one, other) => one.after - other.after,
   lost: (one, other) => one.lost - other.lost,
   margin: (one, other) => one.margin - other.margin,
-};
+  // A receptor that had no sun before has lost nothing.
+  loss: (one, other) => (one.loss ?? 0) - (other.loss ?? 0),
+} satisfies Record<string, Compare>;
 
-/** The columns by which the findings table can be sorted. */
-export const findingSortFields: readonly string[] = [...Object.keys(comparisons), 'loss'];
+type SortField = keyof typeof comparisons;
 
-/** Filters and sorts the findings table; by itself what is not met comes first, the smallest margin first. */
+const sortFields = [
+  'receptor',
+  'label',
+  'class',
+  'clause',
+  'day',
+  'finding',
+  'before',
+  'after',
+  'lost',
+  'margin',
+  'loss',
+] as const satisfies readonly SortField[];
+
+/** Filters and sorts the findings table; by itself what is not met comes first, the worst margin first. */
 export function selectFindingRows(
   rows: readonly FindingRow[],
   { finding, clause, q, sort }: Omit<FindingsQuery, 'page' | 'pageSize'>,
 ): FindingRow[] {
+  const order = parseSort(sort, sortFields, { field: 'finding', direction: 'asc' });
+  const sign = order.direction === 'asc' ? 1 : -1;
+  const compare = comparisons[order.field];
   const wanted = q?.toLowerCase() ?? '';
-  const selected = rows.filter(
-    (row) =>
-      (finding === undefined || row.finding === finding) &&
-      (clause === undefined || row.clause === clause) &&
-      (wanted === '' || `${row.receptor} ${row.label}`.toLowerCase().includes(wanted)),
-  );
-  return selected.sort(chooseComparison(sort));
-}
-
-function chooseComparison(sort: string | undefined): Compare {
-  const direction = sort?.startsWith('-') === true ? -1 : 1;
-  const field = sort?.replace(/^-/, '') ?? '';
-  if (field === 'loss') return byLoss(direction);
-  const compare = comparisons[field];
-  if (compare !== undefined) return (one, other) => direction * compare(one, other);
-  return (one, other) =>
-    findingOrder[one.finding] - findingOrder[other.finding] ||
-    one.margin - other.margin ||
-    byText(one.label, other.label);
+  return rows
+    .filter(
+      (row) =>
+        (finding === undefined || row.finding === finding) &&
+        (clause === undefined || row.clause === clause) &&
+        (wanted === '' || `${row.receptor} ${row.label}`.toLowerCase().includes(wanted)),
+    )
+    .sort(
+      (one, other) =>
+        sign * compare(one, other) ||
+        comparisons.margin(one, other) ||
+        comparisons.label(one, other),
+    );
 }
 
 /** One page of a list that is whole in memory. */

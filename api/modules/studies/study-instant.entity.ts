@@ -19,7 +19,7 @@ export const StudyInstant = defineEntity({
     /** Null with the sun down. */
     netNewM2: p.double().$type<number>().nullable(),
     removedM2: p.double().$type<number>().nullable(),
-    shadows: p.json<InstantShadows>().nullable().lazy().ref(),
+    shadows: p.json<InstantShadows>().nullable().lazy(true, false),
   },
 });
 export type StudyInstant = InferEntity<typeof StudyInstant>;

@@ -40,9 +40,9 @@ export const Study = defineEntity({
     digest: p.string().length(71).nullable(),
     findings: p.json<StudyFindings>().nullable(),
     /** The findings table, made once from the evidence. */
-    findingRows: p.json<FindingRow[]>().nullable().lazy().ref(),
+    findingRows: p.json<FindingRow[]>().nullable().lazy(true, false),
     /** The evidence file, to the byte as it is handed out. */
-    evidence: p.text().nullable().lazy().ref(),
+    evidence: p.text().nullable().lazy(true, false),
   },
 });
 export type Study = InferEntity<typeof Study>;
