@@ -15,7 +15,7 @@ import type { MassingBlock } from './massing-block.ts';
 export type PlaneOutline = readonly Ring[];
 
 /** Edges looked at in comparing pairs of blocks, at most: about a second's work. */
-export const mostComparedEdges = 1_000_000;
+export const mostComparedEdges = 500_000;
 
 /** A block with its footprint on the local plane, in metres. */
 export interface BlockFootprint {
