@@ -27,7 +27,7 @@ export interface Collector {
   shape: Shape;
 }
 
-export const collectorCount = 20;
+const collectorCount = 20;
 
 /** The outward direction of a building's sides that looks most to the south. */
 function mostSouthern(shape: Shape): Point {

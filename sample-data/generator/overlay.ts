@@ -7,7 +7,7 @@ const SLIVER_M2 = 0.5;
 const toMillimetre = (value: number): number => Math.round(value * 1000) / 1000;
 
 /** To whole millimetres, so that the same corner computed in two ways is the same corner. */
-export const snap = (point: Point): Point => [toMillimetre(point[0]), toMillimetre(point[1])];
+const snap = (point: Point): Point => [toMillimetre(point[0]), toMillimetre(point[1])];
 
 const closed = (ring: Ring): [number, number][] => {
   const corners = ring.map((corner): [number, number] => [...snap(corner)]);

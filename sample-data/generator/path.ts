@@ -23,7 +23,7 @@ const stretchesOf = (path: Path): [Point, Point][] =>
 export const pathLength = (path: Path): number =>
   stretchesOf(path).reduce((sum, [a, b]) => sum + distance(a, b), 0);
 
-/** A smooth line through the points: a centripetal-free Catmull-Rom curve with `steps` stretches between two points. */
+/** A smooth line through the points: a uniform Catmull-Rom curve, `steps` stretches from point to point. */
 export function smooth(points: Path, steps: number): Path {
   const at = (index: number): Point => {
     const last = points.length - 1;
@@ -119,7 +119,7 @@ export function extended(path: Path, byM: number): Path {
 }
 
 /** `count` points evenly spaced along the path, both ends included. */
-export const evenPoints = (path: Path, count: number): Path =>
+const evenPoints = (path: Path, count: number): Path =>
   Array.from(
     { length: count },
     (_, index) => placeAlong(path, (pathLength(path) * index) / (count - 1)).point,

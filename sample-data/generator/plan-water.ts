@@ -53,7 +53,7 @@ const naturalShoreEast: Path = [
 ];
 
 /** Land lies to the left of this line. */
-export const shoreline: Path = [
+const shoreline: Path = [
   ...smooth(naturalShoreWest, 3),
   ...quayWall.slice(1, -1),
   ...smooth(naturalShoreEast, 3),

@@ -14,7 +14,7 @@ export const minus = (a: Point, b: Point): Point => [a[0] - b[0], a[1] - b[1]];
 export const times = (a: Point, factor: number): Point => [a[0] * factor, a[1] * factor];
 export const dot = (a: Point, b: Point): number => a[0] * b[0] + a[1] * b[1];
 export const cross = (a: Point, b: Point): number => a[0] * b[1] - a[1] * b[0];
-export const lengthOf = (a: Point): number => Math.hypot(a[0], a[1]);
+const lengthOf = (a: Point): number => Math.hypot(a[0], a[1]);
 export const distance = (a: Point, b: Point): number => lengthOf(minus(a, b));
 /** A quarter turn counter-clockwise. */
 export const leftOf = (a: Point): Point => [-a[1], a[0]];
@@ -34,7 +34,7 @@ export function sidesOf(ring: Ring): [Point, Point][] {
 }
 
 /** Positive where the ring runs counter-clockwise, in m². */
-export function signedAreaOf(ring: Ring): number {
+function signedAreaOf(ring: Ring): number {
   return sidesOf(ring).reduce((sum, [a, b]) => sum + cross(a, b), 0) / 2;
 }
 
@@ -87,7 +87,7 @@ export function nearestOnStretch(point: Point, a: Point, b: Point): { gapM: numb
 }
 
 /** The least distance from a point to the border of a shape, in metres. */
-export function gapToBorder(point: Point, shape: Shape): number {
+function gapToBorder(point: Point, shape: Shape): number {
   return Math.min(
     ...[shape.outer, ...shape.holes].flatMap((ring) =>
       sidesOf(ring).map(([a, b]) => nearestOnStretch(point, a, b).gapM),

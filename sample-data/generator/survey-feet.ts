@@ -1,5 +1,5 @@
 /** Metres in a US survey foot, by its definition (1 m = 39.37 in exactly). */
-export const metresPerSurveyFoot = 1200 / 3937;
+const metresPerSurveyFoot = 1200 / 3937;
 
 export const toSurveyFeet = (metres: number): number => metres / metresPerSurveyFoot;
 
