@@ -1,4 +1,5 @@
 import type { IssuePlace } from './issue-severities.ts';
+import { cleanText, cutText } from './plain-text.ts';
 
 /** How issues speak of a block: `feature` as the contract names it, `text` to begin a sentence with. */
 export interface BlockLabel {
@@ -26,7 +27,8 @@ export function placeAt(label: BlockLabel, lngLat: [number, number] | null): Iss
   return { feature: label.feature, lngLat };
 }
 
-/** An id or a name may be of any length; a sentence must stay one. */
+/** An id or a name may hold anything at any length; a sentence must stay one. */
 function shorten(text: string): string {
-  return text.length > 100 ? `${text.slice(0, 97)}…` : text;
+  const clean = cleanText(text);
+  return clean.length > 100 ? `${cutText(clean, 97)}…` : clean;
 }

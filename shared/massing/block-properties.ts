@@ -2,7 +2,7 @@ import { placeAt, type BlockLabel } from './block-label.ts';
 import { createIssue, type IssueCode } from './issue-severities.ts';
 import type { MassingBlock, MassingRole } from './massing-block.ts';
 import type { MassingIssue } from './massing-issue.ts';
-import { showValue } from './show-value.ts';
+import { showValue } from './plain-text.ts';
 
 /** The names under which each property is found, in lower case without `_`, `-` and spaces. */
 const propertyNames = {
@@ -192,7 +192,7 @@ function describeMissingTop(
   const feet = Object.keys(record).find((name) => /(ft|feet)$/.test(plainName(name)));
   if (feet !== undefined) {
     return [
-      `${label.text} has no top height in metres; ${feet} is not read.`,
+      `${label.text} has no top height in metres; ${showValue(feet)} is not read.`,
       'Convert the heights to metres (1 ft is 0.3048 m) and give them as base and top.',
     ];
   }

@@ -39,6 +39,7 @@ export const issueSeverities = {
   MASSING_ID_REPEATED: 'repaired',
   MASSING_ID_TOO_LONG: 'repaired',
   MASSING_NAME_TOO_LONG: 'repaired',
+  MASSING_TEXT_CLEANED: 'repaired',
   MASSING_NUMBER_AS_TEXT: 'repaired',
   MASSING_HEIGHTS_IN_COORDINATES: 'warning',
   MASSING_HEIGHT_READ_AS_TOP: 'warning',

@@ -1,8 +1,8 @@
 import { placeAt, type BlockLabel } from '../block-label.ts';
 import { createIssue } from '../issue-severities.ts';
 import type { MassingIssue } from '../massing-issue.ts';
+import { showValue } from '../plain-text.ts';
 import type { LngLat } from '../repair-footprint.ts';
-import { showValue } from '../show-value.ts';
 import { isRecord } from './json-document.ts';
 
 export type ReadCoordinates =

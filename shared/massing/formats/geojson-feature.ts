@@ -4,6 +4,7 @@ import { createIssue, type IssueCode } from '../issue-severities.ts';
 import type { MassingBlock } from '../massing-block.ts';
 import type { MassingIssue } from '../massing-issue.ts';
 import type { UnnamedBlock } from '../name-blocks.ts';
+import { cleanText, cutText } from '../plain-text.ts';
 import { repairFootprint, type LngLat } from '../repair-footprint.ts';
 import { findFirstPosition, readCoordinates } from './geojson-coordinates.ts';
 import { isRecord } from './json-document.ts';
@@ -93,7 +94,7 @@ function readGeometry(feature: unknown, label: BlockLabel): ReadGeometry {
   if (type !== 'Polygon' && type !== 'MultiPolygon') {
     return refuse(
       'MASSING_GEOMETRY_NOT_A_FOOTPRINT',
-      `${label.text} is a ${typeof type === 'string' ? type : 'geometry without a type'}, which has no footprint.`,
+      `${label.text} is a ${typeof type === 'string' ? cutText(cleanText(type), 50) : 'geometry without a type'}, which has no footprint.`,
       'Draw the footprint as a closed polygon, or take the feature out of the file.',
       findFirstPosition(geometry.coordinates),
     );

@@ -3,7 +3,7 @@ import type { MassingIssue } from '../massing-issue.ts';
 import { massingLimits } from '../massing-limits.ts';
 import type { ReadMassing } from '../massing-reading.ts';
 import { nameBlocks, type UnnamedBlock } from '../name-blocks.ts';
-import { showValue } from '../show-value.ts';
+import { showValue } from '../plain-text.ts';
 import { countPositions } from './geojson-coordinates.ts';
 import { readGeojsonFeature } from './geojson-feature.ts';
 import { isRecord, parseJsonDocument } from './json-document.ts';

@@ -96,7 +96,7 @@ describe('the heights of a block', () => {
   it('are not read from feet', () => {
     const { issues } = read({ height_ft: 120 });
     const issue = issueOf(issues, 'MASSING_TOP_MISSING');
-    expect(issue.message).toContain('height_ft is not read');
+    expect(issue.message).toContain('"height_ft" is not read');
     expect(issue.suggestion).toContain('0.3048');
   });
 

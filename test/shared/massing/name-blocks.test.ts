@@ -27,7 +27,7 @@ describe('nameBlocks', () => {
     const { ids, issues } = readIds(undefined, 'a', ' ');
     expect(ids).toEqual(['block-1', 'a', 'block-3']);
     expect(issueOf(issues, 'MASSING_ID_MISSING').message).toBe(
-      '2 blocks have no id and got one by the place in the file: block-1, block-3.',
+      '2 blocks have no id and were numbered by order: block-1, block-3.',
     );
   });
 
@@ -35,7 +35,11 @@ describe('nameBlocks', () => {
     const { ids, issues } = readIds('x'.repeat(101), 'x'.repeat(102));
     expect(ids[0]).toBe('x'.repeat(100));
     expect(ids[1]).toBe(`${'x'.repeat(98)}-2`);
-    expect(codesOf(issues)).toEqual(['MASSING_ID_TOO_LONG', 'MASSING_ID_TOO_LONG']);
+    expect(codesOf(issues)).toEqual([
+      'MASSING_ID_TOO_LONG',
+      'MASSING_ID_TOO_LONG',
+      'MASSING_ID_REPEATED',
+    ]);
   });
 
   it('cuts a name of more than 200 characters and says so', () => {
@@ -44,5 +48,25 @@ describe('nameBlocks', () => {
     );
     expect(blocks[0]?.name).toHaveLength(200);
     expect(codesOf(issues)).toEqual(['MASSING_NAME_TOO_LONG']);
+  });
+
+  it('leaves out characters that no page or database takes, and says so', () => {
+    const { blocks, issues } = readFeatures(
+      feature({ id: 'a\u0000b', name: 'North\ud800 tower', base: 0, top: 9 }),
+      feature({ id: '\u0007', base: 0, top: 9 }),
+    );
+    expect(blocks.map(({ id, name }) => [id, name])).toEqual([
+      ['ab', 'North tower'],
+      ['block-2', null],
+    ]);
+    expect(codesOf(issues).filter((code) => code === 'MASSING_TEXT_CLEANED')).toHaveLength(3);
+    expect(JSON.stringify(issues)).not.toMatch(/\\u0000|\\ud800/);
+  });
+
+  it('cuts no character in half', () => {
+    const { blocks } = readFeatures(
+      feature({ id: 'a', name: `${'n'.repeat(199)}🏠`, base: 0, top: 9 }),
+    );
+    expect(blocks[0]?.name).toBe('n'.repeat(199));
   });
 });
