@@ -100,9 +100,6 @@ function drawFace(
       d: closedPath(face.rings.map((ring) => ring.map(place))),
       'fill-rule': 'evenodd',
       fill,
-      // Closes the hair that renderers leave between a wall's layers.
-      stroke: fill,
-      'stroke-width': 0.5,
     }),
     element('path', {
       d: segmentsPath(face.edges.map(([from, to]) => [place(from), place(to)] as const)),
@@ -149,6 +146,14 @@ function drawHeights(
         fill: 'none',
         stroke: palette.ink,
         'stroke-width': 0.6,
+      }),
+      element('rect', {
+        x: endX - 5 - estimateTextWidth(text, fontSize),
+        y: y - fontSize * 0.65,
+        width: estimateTextWidth(text, fontSize) + 4,
+        height: fontSize * 1.3,
+        fill: '#FFFFFF',
+        'fill-opacity': 0.85,
       }),
       element(
         'text',

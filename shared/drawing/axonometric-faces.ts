@@ -72,6 +72,9 @@ export function listFaces(prisms: readonly Prism[], view: View): Face[] {
   });
 }
 
+/** Metres by which a wall's layers overlap, because renderers leave a hair between areas that merely touch. */
+const seamM = 0.1;
+
 interface Wall extends WallInPlan {
   prism: number;
   baseM: number;
@@ -125,9 +128,10 @@ function wallFace(wall: Wall, lowerM: number, upperM: number, view: View): Face 
     at.across,
     -at.depth * Math.sin(altitude) - z * Math.cos(altitude),
   ];
+  const paintedFromM = lowerM === wall.baseM ? lowerM : lowerM - seamM;
   const corners: SheetRing = [
-    seen(wall.from, lowerM),
-    seen(wall.to, lowerM),
+    seen(wall.from, paintedFromM),
+    seen(wall.to, paintedFromM),
     seen(wall.to, upperM),
     seen(wall.from, upperM),
   ];

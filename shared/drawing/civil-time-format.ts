@@ -10,6 +10,8 @@ export interface CivilTimeFormat {
   zone: (at: string) => string;
   /** `December 21, 2026, 1:10 p.m. CST` */
   dateAndClock: (at: string) => string;
+  /** The civil date of an instant: `2026-12-21`. */
+  civilDateOf: (at: string) => string;
   /** A civil date `2026-12-21` as `December 21, 2026`. */
   civilDate: (date: string) => string;
   /** A civil date `2026-12-21` as `December 21`. */
@@ -41,6 +43,8 @@ export function createCivilTimeFormat(locale: string, timeZone: string): CivilTi
     day: 'numeric',
     timeZone: 'UTC',
   });
+  // Swedish writes dates as ISO 8601 does.
+  const isoDates = new Intl.DateTimeFormat('sv-SE', { dateStyle: 'short', timeZone });
   const clockParts = new Intl.DateTimeFormat('en-GB', {
     hour: '2-digit',
     minute: '2-digit',
@@ -69,6 +73,7 @@ export function createCivilTimeFormat(locale: string, timeZone: string): CivilTi
     clockWithZone,
     zone,
     dateAndClock: (at) => `${date(at)}, ${clockWithZone(at)}`,
+    civilDateOf: (at) => isoDates.format(new Date(at)),
     civilDate: (day) => civilDates.format(new Date(`${day}T00:00:00Z`)),
     monthAndDay: (day) => monthDays.format(new Date(`${day}T00:00:00Z`)),
     shortMonthAndDay: (day) => shortMonthDays.format(new Date(`${day}T00:00:00Z`)),

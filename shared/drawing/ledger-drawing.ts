@@ -1,7 +1,7 @@
 import type { LedgerDay, SunLedger } from '../receptors/sun-ledger-schema.ts';
 import type { CivilTimeFormat } from './civil-time-format.ts';
 import type { FigureFormat } from './figure-format.ts';
-import type { SheetPoint } from './frame.ts';
+import type { SheetPoint, SheetRing } from './frame.ts';
 import { hatchLines } from './hatch.ts';
 import { palette } from './palette.ts';
 import { closedPath, segmentsPath } from './path-data.ts';
@@ -18,8 +18,13 @@ export interface LedgerOptions {
   hasFigures: boolean;
 }
 
-const rowHeight = 38;
-const bandHeight = 11;
+type Sample = LedgerDay['samples'][number];
+
+/** Smaller losses are thinner than a line. */
+const leastLostShare = 0.005;
+
+const rowHeight = 34;
+const bandHeight = 10;
 const headHeight = 20;
 
 /**
@@ -96,23 +101,21 @@ function drawDay(
   options: LedgerOptions,
 ): Svg {
   const { time, figures } = options;
-  const beforeFoot = top + 4 + bandHeight;
-  const afterFoot = beforeFoot + 4 + bandHeight;
+  const beforeFoot = top + 3 + bandHeight;
+  const afterFoot = beforeFoot + 3 + bandHeight;
   const baseline = afterFoot + 3;
   const places = day.samples.map((sample) => ({ x: toX(time.clockHours(sample.at)), sample }));
   const firstX = places[0]?.x;
   const lastX = places[places.length - 1]?.x;
-  const area = (foot: number, low: (index: number) => number, high: (index: number) => number) => [
-    ...places.map(({ x }, index): SheetPoint => [x, foot - high(index) * bandHeight]),
-    ...places.map(({ x }, index): SheetPoint => [x, foot - low(index) * bandHeight]).reverse(),
+  const area = (foot: number, share: (sample: Sample) => number): SheetPoint[] => [
+    [firstX ?? 0, foot],
+    ...places.map(({ x, sample }): SheetPoint => [x, foot - share(sample) * bandHeight]),
+    [lastX ?? 0, foot],
   ];
-  const before = (index: number) => day.samples[index]?.shareBefore ?? 0;
-  const after = (index: number) => day.samples[index]?.shareAfter ?? 0;
-  const lost = area(afterFoot, after, (index) => Math.max(before(index), after(index)));
+  const before = (sample: Sample) => sample.shareBefore;
+  const after = (sample: Sample) => sample.shareAfter;
   const firstSample = day.samples[0];
-  const judged = options.judged.filter(
-    ({ fromAt }) => firstSample !== undefined && time.date(fromAt) === time.date(firstSample.at),
-  );
+  const judged = options.judged.filter(({ fromAt }) => time.civilDateOf(fromAt) === day.date);
 
   return group({ 'data-part': 'day' }, [
     text(time.shortMonthAndDay(day.date), 0, beforeFoot, 'start', 9),
@@ -131,9 +134,11 @@ function drawDay(
         'stroke-width': 0.4,
       }),
     ),
-    sunBand(area(beforeFoot, () => 0, before)),
-    sunBand(area(afterFoot, () => 0, after)),
-    ...lostBand(lost),
+    wholeBand(firstX, lastX, beforeFoot),
+    wholeBand(firstX, lastX, afterFoot),
+    sunBand(area(beforeFoot, before)),
+    sunBand(area(afterFoot, after)),
+    ...lostBands(places, afterFoot),
     ...(firstX === undefined || lastX === undefined
       ? []
       : [
@@ -178,6 +183,19 @@ function drawDay(
   ]);
 }
 
+/** How high a band is when the whole open area lies in sun. */
+function wholeBand(firstX: number | undefined, lastX: number | undefined, foot: number): Svg {
+  return element('rect', {
+    x: firstX ?? 0,
+    y: foot - bandHeight,
+    width: (lastX ?? 0) - (firstX ?? 0),
+    height: bandHeight,
+    fill: 'none',
+    stroke: palette.hairline,
+    'stroke-width': 0.3,
+  });
+}
+
 function sunBand(points: readonly SheetPoint[]): Svg {
   return element('path', {
     'data-part': 'sun',
@@ -188,24 +206,50 @@ function sunBand(points: readonly SheetPoint[]): Svg {
   });
 }
 
-function lostBand(points: readonly SheetPoint[]): Svg[] {
-  return [
-    element('path', {
-      'data-part': 'lost',
-      d: closedPath([points]),
-      fill: palette.madder,
-      'fill-opacity': 0.1,
-      stroke: palette.madder,
-      'stroke-width': 0.4,
-    }),
-    element('path', {
-      'data-part': 'lost-hatch',
-      d: segmentsPath(hatchLines([points], 3, 45)),
-      fill: 'none',
-      stroke: palette.madder,
-      'stroke-width': 0.8,
-    }),
-  ];
+/** The stretches in which sun is lost, between the curve after and the curve before. */
+function lostBands(places: readonly { x: number; sample: Sample }[], foot: number): Svg[] {
+  const isLost = ({ sample }: { sample: Sample }) =>
+    sample.shareBefore - sample.shareAfter > leastLostShare;
+  const runs: { x: number; sample: Sample }[][] = [];
+  places.forEach((place, index) => {
+    if (!isLost(place)) return;
+    const previous = places[index - 1];
+    const next = places[index + 1];
+    if (previous === undefined || !isLost(previous)) {
+      runs.push(previous === undefined ? [place] : [previous, place]);
+    } else {
+      runs[runs.length - 1]?.push(place);
+    }
+    if (next !== undefined && !isLost(next)) runs[runs.length - 1]?.push(next);
+  });
+  return runs.flatMap((run) => {
+    const ring: SheetRing = [
+      ...run.map(({ x, sample }): SheetPoint => [
+        x,
+        foot - Math.max(sample.shareBefore, sample.shareAfter) * bandHeight,
+      ]),
+      ...run
+        .map(({ x, sample }): SheetPoint => [x, foot - sample.shareAfter * bandHeight])
+        .reverse(),
+    ];
+    return [
+      element('path', {
+        'data-part': 'lost',
+        d: closedPath([ring]),
+        fill: palette.madder,
+        'fill-opacity': 0.1,
+        stroke: palette.madder,
+        'stroke-width': 0.4,
+      }),
+      element('path', {
+        'data-part': 'lost-hatch',
+        d: segmentsPath(hatchLines([ring], 3, 45)),
+        fill: 'none',
+        stroke: palette.madder,
+        'stroke-width': 0.8,
+      }),
+    ];
+  });
 }
 
 function text(

@@ -80,8 +80,8 @@ export const emptyPlan: PlanContent = {
 export function drawPlan(content: PlanContent, options: PlanOptions): string {
   const plane = createLocalPlane(options.origin.longitude, options.origin.latitude);
   const frame = createFrame(plane, extentOnPlane(options.extent, plane), options.width);
-  const pen = options.detail === 'sheet' ? sheetPen : smallPen;
   const isSheet = options.detail === 'sheet';
+  const pen = isSheet ? sheetPen(sheetUnit(frame)) : smallPen;
   const proposal = content.proposal.map(({ geometry, topM }) => ({
     rings: frame.cutRings(geometry),
     topM,
@@ -130,7 +130,7 @@ export function drawPlan(content: PlanContent, options: PlanOptions): string {
         d: outlinePath(rings, frame),
         fill: 'none',
         stroke: palette.madder,
-        'stroke-width': 1.4,
+        'stroke-width': pen.receptor,
       }),
     ),
     ...(content.chosen === null
@@ -143,8 +143,10 @@ export function drawPlan(content: PlanContent, options: PlanOptions): string {
         ]),
     ...(isSheet ? drawSheetText(content, streets, frame, proposal, keys, options) : []),
     element('rect', {
-      width: frame.width,
-      height: frame.height,
+      x: pen.frame / 2,
+      y: pen.frame / 2,
+      width: frame.width - pen.frame,
+      height: frame.height - pen.frame,
       fill: 'none',
       stroke: palette.ink,
       'stroke-width': pen.frame,
@@ -158,23 +160,34 @@ interface Pen {
   shadowLine: number;
   hatch: number;
   hatchSpacing: number;
+  waterSpacing: number;
   site: number;
   siteDashes: string;
   proposal: number;
+  receptor: number;
   frame: number;
 }
 
-const sheetPen: Pen = {
-  parcel: 0.5,
-  building: 0.7,
-  shadowLine: 1,
-  hatch: 1.1,
-  hatchSpacing: 5,
-  site: 1.5,
-  siteDashes: '10 3 2 3',
-  proposal: 2,
-  frame: 1.6,
-};
+/** A smaller sheet has finer lines and smaller words, down to what can still be read on paper. */
+function sheetUnit(frame: Frame): number {
+  return Math.min(Math.max(frame.width / 480, 0.7), 1);
+}
+
+function sheetPen(unit: number): Pen {
+  return {
+    parcel: 0.5 * unit,
+    building: 0.7 * unit,
+    shadowLine: unit,
+    hatch: 1.1 * unit,
+    hatchSpacing: 5 * unit,
+    waterSpacing: 4.5,
+    site: 1.5 * unit,
+    siteDashes: [10, 3, 2, 3].map((length) => (length * unit).toFixed(1)).join(' '),
+    proposal: 2 * unit,
+    receptor: 1.4 * unit,
+    frame: 1.2,
+  };
+}
 
 const smallPen: Pen = {
   parcel: 0.25,
@@ -182,9 +195,11 @@ const smallPen: Pen = {
   shadowLine: 0.4,
   hatch: 0.55,
   hatchSpacing: 2.4,
+  waterSpacing: 4,
   site: 0.8,
   siteDashes: '4 1.2 0.8 1.2',
   proposal: 0.9,
+  receptor: 0.7,
   frame: 0.8,
 };
 
@@ -195,7 +210,7 @@ function drawGround(content: PlanContent, frame: Frame, pen: Pen): Svg {
     // Water is ruled, because colour is kept for sun and shade.
     element('path', {
       'data-part': 'water',
-      d: segmentsPath(hatchLines(water, pen.hatchSpacing * 0.9, 0)),
+      d: segmentsPath(hatchLines(water, pen.waterSpacing, 0)),
       fill: 'none',
       stroke: palette.hairline,
       'stroke-width': pen.parcel,
@@ -270,8 +285,9 @@ function drawSheetText(
   keys: { rings: SheetRing[]; mark: string }[],
   options: PlanOptions,
 ): Svg[] {
-  const fontSize = 8.5;
-  const margin = 10;
+  const unit = sheetUnit(frame);
+  const fontSize = 8.5 * unit;
+  const margin = 10 * unit;
   const block = measureTitleBlock(options.titleBlock, fontSize);
   const blockBox = {
     x: frame.width - margin - block.width,
@@ -279,31 +295,38 @@ function drawSheetText(
     width: block.width,
     height: block.height,
   };
-  const scaleBarLongest = 90;
-  const northBox = { x: 1, y: frame.height - 68, width: scaleBarLongest + 84, height: 67 };
+  const scaleBarLongest = 90 * unit;
+  const northHeight = 67 * unit;
+  const northBox = {
+    x: 1,
+    y: frame.height - northHeight - 1,
+    width: scaleBarLongest + 84 * unit,
+    height: northHeight,
+  };
   const taken = [northBox, ...(options.titleBlock.length === 0 ? [] : [blockBox])];
-  const heights = drawBlockHeights(proposal, frame, options.figures, taken);
-  const marks = drawKeys(keys, frame, [...taken, ...heights.boxes]);
-  const streets = drawStreetNames(streetsOnSheet, frame, [
-    ...taken,
-    ...heights.boxes,
-    ...marks.boxes,
-  ]);
-  const names = drawAreaNames([...content.water, ...content.openSpace], frame, [
-    ...taken,
-    ...heights.boxes,
-    ...marks.boxes,
-    ...streets.boxes,
-  ]);
+  const heights = drawBlockHeights(proposal, frame, options.figures, taken, 8 * unit);
+  const marks = drawKeys(keys, frame, [...taken, ...heights.boxes], 7.5 * unit);
+  const streets = drawStreetNames(
+    streetsOnSheet,
+    frame,
+    [...taken, ...heights.boxes, ...marks.boxes],
+    7 * unit,
+  );
+  const names = drawAreaNames(
+    [...content.water, ...content.openSpace],
+    frame,
+    [...taken, ...heights.boxes, ...marks.boxes, ...streets.boxes],
+    7 * unit,
+  );
   return [
     ...streets.drawn,
     ...names.drawn,
     ...marks.drawn,
     ...heights.drawn,
     element('rect', { ...northBox, fill: palette.paper, 'fill-opacity': 0.85 }),
-    drawNorth([northBox.x + 24, frame.height - 16], 34, fontSize),
+    drawNorth([northBox.x + 24 * unit, frame.height - 16 * unit], 34 * unit, fontSize),
     drawScaleBar(
-      [northBox.x + 60, frame.height - 18],
+      [northBox.x + 60 * unit, frame.height - 18 * unit],
       frame.pxPerM,
       scaleBarLongest,
       fontSize,

@@ -24,8 +24,8 @@ export function drawBlockHeights(
   frame: Frame,
   figures: FigureFormat,
   taken: readonly LabelBox[],
+  fontSize: number,
 ): PlacedLabels {
-  const fontSize = 8;
   const visible = blocks.filter(({ rings }) => rings.length > 0);
   const site = boxAround(visible.flatMap(({ rings }) => rings));
   const boxes: LabelBox[] = [];
@@ -43,7 +43,7 @@ export function drawBlockHeights(
     const box = placeBeside(outside, size, busy, frame);
     boxes.push(box);
     return [
-      leader(middleOf(boxAround(rings)), box),
+      leader(middleOf(placeInside(rings, dot, [], higher) ?? boxAround(rings)), box),
       boxedText(box, text, fontSize, 400, palette.ink),
     ];
   });
@@ -55,8 +55,8 @@ export function drawKeys(
   keys: readonly { rings: SheetRing[]; mark: string }[],
   frame: Frame,
   taken: readonly LabelBox[],
+  fontSize: number,
 ): PlacedLabels {
-  const fontSize = 7.5;
   const boxes: LabelBox[] = [];
   const marked = new Set<string>();
   const drawn = keys.flatMap(({ rings, mark }) => {
@@ -76,8 +76,8 @@ export function drawAreaNames(
   areas: readonly NamedArea[],
   frame: Frame,
   taken: readonly LabelBox[],
+  fontSize: number,
 ): PlacedLabels {
-  const fontSize = 7;
   const boxes: LabelBox[] = [];
   const drawn = areas.flatMap(({ name, geometry }) => {
     const rings = frame.cutRings(geometry);
@@ -90,6 +90,8 @@ export function drawAreaNames(
   });
   return { drawn, boxes };
 }
+
+const dot = { width: 3, height: 3 };
 
 /** A line from a block to its label outside, with a dot on the block. */
 function leader(from: SheetPoint, to: LabelBox): Svg {

@@ -10,8 +10,6 @@ export interface StreetLine {
   lines: readonly (readonly [number, number])[][];
 }
 
-const fontSize = 7;
-
 /** How much shorter than the street a chord may be for a name to follow it. */
 const leastStraightness = 0.985;
 
@@ -23,6 +21,7 @@ export function drawStreetNames(
   streets: readonly { name: string; lines: readonly (readonly SheetPoint[])[] }[],
   frame: Frame,
   taken: readonly LabelBox[],
+  fontSize: number,
 ): { drawn: Svg[]; boxes: LabelBox[] } {
   const drawn: Svg[] = [];
   const boxes: LabelBox[] = [];
@@ -31,7 +30,7 @@ export function drawStreetNames(
     if (named.has(name)) continue;
     const width = estimateTextWidth(name, fontSize);
     const place = lines
-      .flatMap((line) => listPlaces(line, width))
+      .flatMap((line) => listPlaces(line, width, fontSize))
       .filter(
         ({ box }) =>
           isInFrame(box, frame) && ![...taken, ...boxes].some((other) => boxesMeet(box, other)),
@@ -64,7 +63,7 @@ interface NamePlace {
   box: LabelBox;
 }
 
-function listPlaces(line: readonly SheetPoint[], width: number): NamePlace[] {
+function listPlaces(line: readonly SheetPoint[], width: number, fontSize: number): NamePlace[] {
   const places: NamePlace[] = [];
   const total = lengthOf(line);
   for (let start = 4; start + width <= total - 4; start += 6) {

@@ -70,8 +70,11 @@ export function writeNumber(value: number): string {
 
 /** Text as it may stand in SVG; characters that XML forbids become U+FFFD. */
 export function escapeText(text: string): string {
-  return Array.from(text, escapeCharacter).join('');
+  return plainText.test(text) ? text : Array.from(text, escapeCharacter).join('');
 }
+
+/** Most attributes are numbers and path data: nothing to escape. */
+const plainText = /^[\w .,:%#()-]*$/;
 
 const entities: Partial<Record<string, string>> = {
   '&': '&amp;',

@@ -3,13 +3,16 @@ import type { Polygonal } from '../../../shared/geometry/geojson-schema.ts';
 /** Metres in a degree of latitude, near enough to choose a sheet. */
 const METRES_PER_DEGREE = 111_200;
 
+/** The shape of every map in a report. */
+const widthToHeight = 1.45;
+
 /**
  * Chooses what the report's maps show: the site, and the ground around it on which the shadows of
  * the judged hours fall. Shadows fall towards the pole, so the sheet reaches farther to that side.
  *
  * @param site the site's parcels
  * @param heightM height of the proposal in metres
- * @returns west, south, east, north in degrees; one shape (4 wide to 3 high) for every case
+ * @returns west, south, east, north in degrees; one shape for every case
  */
 export function chooseMapExtent(
   site: readonly Polygonal[],
@@ -33,9 +36,9 @@ export function chooseMapExtent(
   const heightOfSheetM = (north - south) * METRES_PER_DEGREE + polewardM + equatorwardM;
   const widthOfSheetM = Math.max(
     (east - west) * metresPerDegreeEast + reachM,
-    (heightOfSheetM * 4) / 3,
+    heightOfSheetM * widthToHeight,
   );
-  const finalHeightM = (widthOfSheetM * 3) / 4;
+  const finalHeightM = widthOfSheetM / widthToHeight;
   const spareM = finalHeightM - heightOfSheetM;
 
   const northSideM = (middleLatitude >= 0 ? polewardM : equatorwardM) + spareM / 2;

@@ -1,0 +1,96 @@
+import { drawPlan } from '../../../../shared/drawing/plan-drawing.ts';
+import { svgDocument } from '../../../../shared/drawing/svg.ts';
+import {
+  drawTitleBlock,
+  measureTitleBlock,
+  titleBlockRows,
+} from '../../../../shared/drawing/title-block.ts';
+import type { ReportInstant } from '../report-payload.ts';
+import type { ReportScene } from './report-scene.ts';
+
+/**
+ * A plan of the case with names, heights, true north, scale bar and title block.
+ *
+ * @param instant whose shadows are drawn; null for the plan alone
+ * @param width points
+ */
+export function drawSheet(
+  scene: ReportScene,
+  instant: ReportInstant | null,
+  width: number,
+): string {
+  return drawPlan(withShadows(scene, instant), {
+    ...sheetOptions(scene, instant, width),
+    titleBlock: titleRows(scene, instant),
+  });
+}
+
+/** The same with its title block beside it, where `drawTitle` puts it. */
+export function drawUntitledSheet(
+  scene: ReportScene,
+  instant: ReportInstant,
+  width: number,
+): string {
+  return drawPlan(withShadows(scene, instant), {
+    ...sheetOptions(scene, instant, width),
+    titleBlock: [],
+  });
+}
+
+/** A title block by itself. */
+export function drawTitle(scene: ReportScene, instant: ReportInstant): string {
+  const rows = titleRows(scene, instant);
+  const fontSize = 7.5;
+  const { width, height } = measureTitleBlock(rows, fontSize);
+  return svgDocument({ width: width + 1, height: height + 1 }, rows.flat().join(', '), [
+    drawTitleBlock(rows, [0.5, 0.5], fontSize),
+  ]);
+}
+
+/** The same plan without any words, for a row of hours. */
+export function drawSmallPlan(scene: ReportScene, instant: ReportInstant, width: number): string {
+  return drawPlan(withShadows(scene, instant), {
+    origin: scene.origin,
+    extent: scene.payload.mapExtent,
+    width,
+    label: `Shadows on ${scene.time.dateAndClock(instant.at)}`,
+    figures: scene.figures,
+    detail: 'small',
+    titleBlock: [],
+  });
+}
+
+function withShadows({ plan }: ReportScene, instant: ReportInstant | null) {
+  return {
+    ...plan,
+    shadows: instant === null ? null : { standing: instant.before, netNew: instant.netNew },
+  };
+}
+
+function sheetOptions(scene: ReportScene, instant: ReportInstant | null, width: number) {
+  const { payload, time, figures, origin } = scene;
+  const when = instant === null ? '' : ` on ${time.dateAndClock(instant.at)}`;
+  return {
+    origin,
+    extent: payload.mapExtent,
+    width,
+    label: `Plan of the site and its neighbours${when}`,
+    figures,
+    detail: 'sheet' as const,
+  };
+}
+
+function titleRows({ payload, time, figures }: ReportScene, instant: ReportInstant | null) {
+  return titleBlockRows(
+    {
+      caseReference: payload.reviewCase.number,
+      revision: payload.revision.revision,
+      studyDigest: payload.study.digest,
+      at: instant?.at ?? null,
+      azimuthDeg: instant?.azimuthDeg ?? null,
+      altitudeDeg: instant?.altitudeDeg ?? null,
+    },
+    time,
+    figures,
+  );
+}
