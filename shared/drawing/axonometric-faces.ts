@@ -138,8 +138,9 @@ function wallFace(wall: Wall, lowerM: number, upperM: number, view: View): Face 
   const edges: [SheetPoint, SheetPoint][] = [];
   if (lowerM === wall.baseM) edges.push([seen(wall.from, lowerM), seen(wall.to, lowerM)]);
   if (upperM === wall.topM) edges.push([seen(wall.from, upperM), seen(wall.to, upperM)]);
-  if (isSame(wall.from, wall.wholeFrom))
+  if (isSame(wall.from, wall.wholeFrom)) {
     edges.push([seen(wall.from, lowerM), seen(wall.from, upperM)]);
+  }
   if (isSame(wall.to, wall.wholeTo)) edges.push([seen(wall.to, lowerM), seen(wall.to, upperM)]);
   return { prism: wall.prism, kind: 'wall', rings: [corners], edges, facesRight: wall.facesRight };
 }

@@ -89,8 +89,9 @@ export function cutRing(ring: SheetRing, width: number, height: number): SheetRi
     const kept: SheetPoint[] = [];
     let previous = points[points.length - 1];
     for (const point of points) {
-      if (previous !== undefined && inside(previous) !== inside(point))
+      if (previous !== undefined && inside(previous) !== inside(point)) {
         kept.push(cross(previous, point));
+      }
       if (inside(point)) kept.push(point);
       previous = point;
     }

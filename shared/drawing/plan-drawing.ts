@@ -35,7 +35,7 @@ export interface PlanContent {
   shadows: { standing: Polygonal; netNew: Polygonal } | null;
   /** The receptor that the reader has picked. */
   chosen: Polygonal | null;
-  /** Receptors that don't meet a clause, each with its mark in a list; drawn in detail `sheet` only. */
+  /** Receptors that don't meet a clause, each with its mark in a list; not drawn in a `small` plan. */
   notMet: readonly { geometry: Polygonal; mark: string }[];
 }
 
@@ -49,8 +49,12 @@ export interface PlanOptions {
   /** What the drawing shows, for people who cannot see it. */
   label: string;
   figures: FigureFormat;
-  /** `sheet`: names, heights, true north, scale bar, title block; `small`: the drawing alone, in finer lines. */
-  detail: 'sheet' | 'small';
+  /**
+   * `sheet`: names, heights, true north, scale bar, title block;
+   * `keyed`: of these the marks of receptors alone, where the rest stands beside the plan;
+   * `small`: the drawing alone, in finer lines.
+   */
+  detail: 'sheet' | 'keyed' | 'small';
   /** Rows of the title block; empty for none. */
   titleBlock: readonly (readonly [string, string])[];
 }
@@ -80,8 +84,8 @@ export const emptyPlan: PlanContent = {
 export function drawPlan(content: PlanContent, options: PlanOptions): string {
   const plane = createLocalPlane(options.origin.longitude, options.origin.latitude);
   const frame = createFrame(plane, extentOnPlane(options.extent, plane), options.width);
-  const isSheet = options.detail === 'sheet';
-  const pen = isSheet ? sheetPen(sheetUnit(frame)) : smallPen;
+  const isSmall = options.detail === 'small';
+  const pen = isSmall ? smallPen : sheetPen(sheetUnit(frame));
   const proposal = content.proposal.map(({ geometry, topM }) => ({
     rings: frame.cutRings(geometry),
     topM,
@@ -124,7 +128,7 @@ export function drawPlan(content: PlanContent, options: PlanOptions): string {
         'stroke-width': pen.proposal,
       }),
     ),
-    ...(isSheet ? keys : []).map(({ rings }) =>
+    ...(isSmall ? [] : keys).map(({ rings }) =>
       element('path', {
         'data-part': 'not-met',
         d: outlinePath(rings, frame),
@@ -141,7 +145,10 @@ export function drawPlan(content: PlanContent, options: PlanOptions): string {
             'stroke-width': 2.4,
           }),
         ]),
-    ...(isSheet ? drawSheetText(content, streets, frame, proposal, keys, options) : []),
+    ...(options.detail === 'sheet'
+      ? drawSheetText(content, streets, frame, proposal, keys, options)
+      : []),
+    ...(options.detail === 'keyed' ? drawKeys(keys, frame, [], 7.5 * sheetUnit(frame)).drawn : []),
     element('rect', {
       x: pen.frame / 2,
       y: pen.frame / 2,

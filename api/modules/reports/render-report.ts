@@ -1,5 +1,5 @@
 import { fileURLToPath } from 'node:url';
-import pdfmake from 'pdfmake';
+import { default as pdfmake } from 'pdfmake';
 import type { Content, TDocumentDefinitions } from 'pdfmake/interfaces';
 import { palette } from '../../../shared/drawing/palette.ts';
 import { commentsPart } from './report-parts/comments.ts';
@@ -15,9 +15,9 @@ import {
   type ReportPageSize,
 } from './report-parts/report-look.ts';
 import { createReportScene, type ReportScene } from './report-parts/report-scene.ts';
+import { requestAndRecommendation } from './report-parts/request-and-recommendation.ts';
 import { ruleAndFindings } from './report-parts/rule-and-findings.ts';
 import { siteAndProposal } from './report-parts/site-and-proposal.ts';
-import { requestAndRecommendation } from './report-parts/request-and-recommendation.ts';
 import { summaryPage } from './report-parts/summary.ts';
 import type { ReportPayload } from './report-payload.ts';
 

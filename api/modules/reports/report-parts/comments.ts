@@ -31,7 +31,7 @@ export function commentsPart({ payload, time, figures }: ReportScene): Content[]
         stack: [
           {
             text: [
-              { text: comment.authorName, bold: true },
+              { text: comment.authorName, style: 'strong' },
               { text: `   ${about}`, fontSize: 8, color: palette.inkLight },
             ],
             margin: [0, 4, 0, 3],

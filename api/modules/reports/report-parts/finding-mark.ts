@@ -22,7 +22,7 @@ export function findingMark(finding: Finding, fontSize = 8.5): Content {
         text: words,
         fontSize,
         width: 'auto',
-        bold: !isMet,
+        style: isMet ? 'plain' : 'strong',
         color: isMet ? palette.ink : palette.madder,
       },
     ],

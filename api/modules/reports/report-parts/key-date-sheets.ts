@@ -1,11 +1,7 @@
 import type { Content, TableCell } from 'pdfmake/interfaces';
-import { extentOnPlane } from '../../../../shared/drawing/frame.ts';
 import { drawLegend } from '../../../../shared/drawing/legend-drawing.ts';
-import { drawNorth, drawScaleBar } from '../../../../shared/drawing/north-and-scale.ts';
-import { svgDocument } from '../../../../shared/drawing/svg.ts';
-import { createLocalPlane } from '../../../../shared/geometry/local-plane.ts';
 import type { ReportInstant } from '../report-payload.ts';
-import { drawSheet, drawSmallPlan } from './plan-sheets.ts';
+import { drawNorthAndScale, drawSheet, drawSmallPlan, pointsToAMetre } from './plan-sheets.ts';
 import { heading, page, subheading } from './report-look.ts';
 import { findWorstInstant, isJudged, type ReportScene } from './report-scene.ts';
 
@@ -121,7 +117,7 @@ function caption({ payload, time, figures }: ReportScene, instant: ReportInstant
       stack: [
         {
           text: [
-            { text: `${date}, ${time.clockWithZone(instant.at)}`, bold: true },
+            { text: `${date}, ${time.clockWithZone(instant.at)}`, style: 'strong' },
             ...(isJudged(payload, instant.at) ? [' · judged'] : []),
           ],
         },
@@ -137,19 +133,11 @@ function caption({ payload, time, figures }: ReportScene, instant: ReportInstant
 
 /** What holds for all maps of a sheet, repeated on each page. */
 function sheetHead(scene: ReportScene): Content {
-  const { payload, figures, origin } = scene;
-  const plane = createLocalPlane(origin.longitude, origin.latitude);
-  const extent = extentOnPlane(payload.mapExtent, plane);
-  const pxPerM = mapWidth / (extent.eastM - extent.westM);
-  /** Points to a metre on paper: 72 to an inch of 0.0254 m. */
-  const scaleNumber = Math.round(72 / 0.0254 / pxPerM / 100) * 100;
-  const furniture = svgDocument({ width: 130, height: 40 }, 'True north and scale of the maps', [
-    drawNorth([20, 38], 26, 6.5),
-    drawScaleBar([48, 32], pxPerM, 60, 6.5, figures),
-  ]);
+  /** 72 points to an inch of 0.0254 m. */
+  const scaleNumber = Math.round(72 / 0.0254 / pointsToAMetre(scene, mapWidth) / 100) * 100;
   return {
     columns: [
-      { svg: furniture, width: 130 },
+      { svg: drawNorthAndScale(scene, mapWidth), width: 130 },
       {
         stack: [
           {
@@ -160,7 +148,7 @@ function sheetHead(scene: ReportScene): Content {
             width: page.textWidth - 142,
           },
           {
-            text: `All maps to one scale, about 1 : ${figures.whole(scaleNumber)} as printed. Azimuth clockwise from true north; altitude with standard refraction.`,
+            text: `All maps to one scale, about 1 : ${scene.figures.whole(scaleNumber)} as printed. Azimuth clockwise from true north; altitude with standard refraction.`,
             style: 'small',
             margin: [0, 2, 0, 0],
           },

@@ -56,7 +56,7 @@ function ledgerEntry(scene: ReportScene, ledger: SunLedger): Content {
           ledger.label,
           {
             text: `   ${nameReceptorClass(ledger.class)}, ${figures.area(ledger.openAreaM2)} of open ground`,
-            bold: false,
+            style: 'plain',
             fontSize: 8.5,
           },
         ],

@@ -1,7 +1,7 @@
 import type { Content } from 'pdfmake/interfaces';
+import { missingCharacter } from './printable-text.ts';
 import { definitions, heading, subheading } from './report-look.ts';
 import type { ReportScene } from './report-scene.ts';
-import { missingCharacter } from './printable-text.ts';
 
 /** How the figures came about, what they leave out, and how anyone can check them. */
 export function methodAndLimits(scene: ReportScene, hasMissingCharacters: boolean): Content[] {
@@ -11,7 +11,7 @@ export function methodAndLimits(scene: ReportScene, hasMissingCharacters: boolea
     heading('Method, limits and cautions'),
     {
       text: 'This is a planning-level study on the massing as submitted. It is no survey and no legal opinion: the local code and licensed professionals decide.',
-      bold: true,
+      style: 'strong',
       margin: [0, 0, 0, 6],
     },
     subheading('How it was computed'),
@@ -66,7 +66,7 @@ function points(lines: readonly string[]): Content[] {
   return lines.map((line) => {
     const [term = '', ...rest] = line.split(': ');
     return {
-      text: rest.length === 0 ? line : [{ text: `${term}: `, bold: true }, rest.join(': ')],
+      text: rest.length === 0 ? line : [{ text: `${term}: `, style: 'strong' }, rest.join(': ')],
       fontSize: 9,
       margin: [0, 0, 0, 3],
     };

@@ -1,3 +1,5 @@
+import { extentOnPlane } from '../../../../shared/drawing/frame.ts';
+import { drawNorth, drawScaleBar } from '../../../../shared/drawing/north-and-scale.ts';
 import { drawPlan } from '../../../../shared/drawing/plan-drawing.ts';
 import { svgDocument } from '../../../../shared/drawing/svg.ts';
 import {
@@ -5,6 +7,7 @@ import {
   measureTitleBlock,
   titleBlockRows,
 } from '../../../../shared/drawing/title-block.ts';
+import { createLocalPlane } from '../../../../shared/geometry/local-plane.ts';
 import type { ReportInstant } from '../report-payload.ts';
 import type { ReportScene } from './report-scene.ts';
 
@@ -25,16 +28,28 @@ export function drawSheet(
   });
 }
 
-/** The same with its title block beside it, where `drawTitle` puts it. */
-export function drawUntitledSheet(
-  scene: ReportScene,
-  instant: ReportInstant,
-  width: number,
-): string {
+/** A plan with the marks of receptors alone; title block, true north and scale bar stand beside it. */
+export function drawKeyedPlan(scene: ReportScene, instant: ReportInstant, width: number): string {
   return drawPlan(withShadows(scene, instant), {
     ...sheetOptions(scene, instant, width),
+    detail: 'keyed',
     titleBlock: [],
   });
+}
+
+/** True north and the scale bar of plans of a width, by themselves. */
+export function drawNorthAndScale(scene: ReportScene, planWidth: number): string {
+  return svgDocument({ width: 130, height: 40 }, 'True north and scale', [
+    drawNorth([20, 38], 26, 6.5),
+    drawScaleBar([48, 32], pointsToAMetre(scene, planWidth), 60, 6.5, scene.figures),
+  ]);
+}
+
+/** The scale of plans of a width. */
+export function pointsToAMetre({ origin, payload }: ReportScene, planWidth: number): number {
+  const plane = createLocalPlane(origin.longitude, origin.latitude);
+  const extent = extentOnPlane(payload.mapExtent, plane);
+  return planWidth / (extent.eastM - extent.westM);
 }
 
 /** A title block by itself. */

@@ -9,6 +9,8 @@ export type ReportPageSize = keyof typeof pageWidths;
 export const fontFamily = 'Public Sans';
 
 export const styles: StyleDictionary = {
+  plain: { bold: false },
+  strong: { bold: true },
   title: { fontSize: 25, bold: true, lineHeight: 1.05 },
   heading: { fontSize: 15, bold: true, margin: [0, 0, 0, 8] },
   subheading: { fontSize: 10.5, bold: true, margin: [0, 10, 0, 4] },

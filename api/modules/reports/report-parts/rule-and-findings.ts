@@ -44,7 +44,7 @@ function clausePart(scene: ReportScene, clause: RuleClause): Content[] {
       ['Days', words.days],
       ['Hours', words.hours],
       ['Measure', words.measure],
-      ['Asked for', { text: words.limit, bold: true }],
+      ['Asked for', { text: words.limit, style: 'strong' }],
       ...(words.disregard === null ? [] : [['Disregarded', words.disregard] as const]),
       ['Found', countFindings(rows, scene)],
     ]),
@@ -110,10 +110,10 @@ function findingCells(scene: ReportScene, row: FindingRow): TableCell[] {
     style: 'figure',
   });
   return [
-    { text: number === undefined ? '' : String(number), bold: true, color: palette.madder },
+    { text: number === undefined ? '' : String(number), style: 'strong', color: palette.madder },
     {
       stack: [
-        { text: row.label, bold: row.finding === 'not-met' },
+        { text: row.label, style: row.finding === 'not-met' ? 'strong' : 'plain' },
         {
           text: [
             nameReceptorClass(row.class),
@@ -159,7 +159,7 @@ function notAffected({ payload, figures }: ReportScene, rows: readonly FindingRo
   return [
     {
       text: `Not affected: ${figures.whole(untouched.length)}`,
-      bold: true,
+      style: 'strong',
       fontSize: 8.5,
       margin: [0, 8, 0, 2],
     },
@@ -167,7 +167,7 @@ function notAffected({ payload, figures }: ReportScene, rows: readonly FindingRo
       text: [
         {
           text: `${nameReceptors(receptorClass)}, ${figures.whole(labels.length)}: `,
-          bold: true,
+          style: 'strong',
         },
         `${labels.sort(compare).join('; ')}.`,
       ],

@@ -5,7 +5,7 @@ import type { RuleClause } from '../../../../shared/rules/rule-schema.ts';
 import { sayClause } from './clause-in-words.ts';
 import { findingMark } from './finding-mark.ts';
 import type { NotMetReceptor } from './not-met.ts';
-import { drawTitle, drawUntitledSheet } from './plan-sheets.ts';
+import { drawKeyedPlan, drawNorthAndScale, drawTitle } from './plan-sheets.ts';
 import { hairlineTable, label, page, rule } from './report-look.ts';
 import { findWorstInstant, nameReceptorClass, type ReportScene } from './report-scene.ts';
 
@@ -44,7 +44,7 @@ function masthead({ payload }: ReportScene): Content {
           { svg: drawNoonMark(), width: 12 },
           {
             text: [
-              { text: payload.municipality.name, bold: true },
+              { text: payload.municipality.name, style: 'strong' },
               '   Staff report on sun and shadow',
             ],
             fontSize: 11,
@@ -195,7 +195,7 @@ function clauseSummary(scene: ReportScene, clause: RuleClause): Content[] {
   return [
     {
       text: [
-        { text: `${clause.title}: `, bold: true },
+        { text: `${clause.title}: `, style: 'strong' },
         `asked for is ${sayClause(clause, judged, scene.time, figures).limit}. `,
         words,
       ],
@@ -239,8 +239,8 @@ function figuresTable(failing: NotMetReceptor[], clause: string, scene: ReportSc
           one.rows
             .filter((row) => row.clause === clause)
             .map((row): Content[] => [
-              { text: String(one.number), bold: true, color: palette.madder },
-              { text: one.label, bold: true },
+              { text: String(one.number), style: 'strong', color: palette.madder },
+              { text: one.label, style: 'strong' },
               nameReceptorClass(one.class),
               row.day === null ? 'all' : time.shortMonthAndDay(row.day),
               { text: figures.inUnit(row.before, row.unit), style: 'figure' },
@@ -267,7 +267,7 @@ function inColumns(failing: NotMetReceptor[]): Content {
     columns: Array.from({ length: columns }, (_, column) => ({
       stack: failing.slice(column * perColumn, (column + 1) * perColumn).map((one) => ({
         text: [
-          { text: `${one.number}  `, bold: true, color: palette.madder },
+          { text: `${one.number}  `, style: 'strong', color: palette.madder },
           `${one.label} (${nameReceptorClass(one.class)})`,
         ],
       })),
@@ -295,11 +295,12 @@ function worstHour(scene: ReportScene): Content[] {
   return [
     {
       columns: [
-        { svg: drawUntitledSheet(scene, worst, width), width },
+        { svg: drawKeyedPlan(scene, worst, width), width },
         {
           stack: [
             label('The judged hour with the most net new shadow'),
             { svg: drawTitle(scene, worst), margin: [0, 4, 0, 6] },
+            { svg: drawNorthAndScale(scene, width), margin: [0, 0, 0, 6] },
             {
               text: `${figures.area(worst.netNewM2)} of ground in shadow that has sun now: hatched. Plain: shadow that is there already. The numbers are those of the list above. Every hour of every key date follows on its own sheet.`,
             },
