@@ -53,7 +53,7 @@ export function methodAndLimits(scene: ReportScene, hasMissingCharacters: boolea
     ...(hasMissingCharacters
       ? [
           {
-            text: `The sign ${missingCharacter} stands for a character that this report's font lacks; the case page shows the text in full.`,
+            text: `The sign ${missingCharacter} stands for a character that this report’s font lacks; the case page shows the text in full.`,
             style: 'small',
           },
         ]

@@ -20,7 +20,7 @@ export function ruleAndFindings(scene: ReportScene): Content[] {
     },
     {
       text: [
-        'Now: what stands today. With it: what stands after the proposal. Limit and margin are those of the limit that decides; a negative margin misses it. ',
+        'Now: what stands today. With it: what stands after the proposal. Limit and margin are those of the limit that decides; a negative margin misses it. Each figure is rounded by itself. ',
         'Close: within one step of the judged time, or one spacing of the sample points, of the limit. ',
         'A receptor is not affected where the proposal changes nothing at any judged instant.',
       ],
@@ -143,7 +143,7 @@ function findingCells(scene: ReportScene, row: FindingRow): TableCell[] {
 function sayMargin(row: FindingRow, { figures }: ReportScene): string {
   const text = figures.inUnit(row.margin, row.unit);
   if (row.unit === 'h' && row.margin !== 0 && Math.abs(row.margin) < 0.5 / 60) {
-    return `${row.margin < 0 ? '−' : ''}< 1 min`;
+    return row.margin < 0 ? 'misses by < 1 min' : '< 1 min';
   }
   return text;
 }

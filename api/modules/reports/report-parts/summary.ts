@@ -4,14 +4,19 @@ import { element, svgDocument } from '../../../../shared/drawing/svg.ts';
 import type { RuleClause } from '../../../../shared/rules/rule-schema.ts';
 import { sayClause } from './clause-in-words.ts';
 import { findingMark } from './finding-mark.ts';
-import type { NotMetReceptor } from './not-met.ts';
+import { splitAddress, type NotMetReceptor } from './not-met.ts';
 import { drawKeyedPlan, drawNorthAndScale, drawTitle } from './plan-sheets.ts';
 import { hairlineTable, label, page, rule } from './report-look.ts';
-import { findWorstInstant, nameReceptorClass, type ReportScene } from './report-scene.ts';
+import {
+  findWorstInstant,
+  nameReceptorClass,
+  nameReceptors,
+  type ReportScene,
+} from './report-scene.ts';
 
 /** Up to so many, for their figures. */
 const mostWithFigures = 24;
-/** Up to so many, for a list in columns; more are set as running text. */
+/** Up to so many, for a list in columns; more are set street by street as running text. */
 const mostInColumns = 96;
 
 /**
@@ -209,14 +214,7 @@ function listFailing(failing: NotMetReceptor[], clause: string, scene: ReportSce
   const total = scene.notMet.length;
   if (total <= mostWithFigures) return figuresTable(failing, clause, scene);
   if (total <= mostInColumns) return inColumns(failing);
-  return {
-    text: failing
-      .map((one) => `${one.number}\u00A0${one.label} (${nameReceptorClass(one.class)})`)
-      .join('; ')
-      .concat('.'),
-    fontSize: total > 250 ? 6 : 7,
-    lineHeight: 1.15,
-  };
+  return runningList(failing);
 }
 
 function figuresTable(failing: NotMetReceptor[], clause: string, scene: ReportScene): Content {
@@ -280,6 +278,32 @@ function inColumns(failing: NotMetReceptor[]): Content {
 
 /** Points: what the first page has left below its list if that has no line, what a line takes, and the smallest map that can be read. */
 const room = { withoutLines: 330, aLine: 14, aClause: 46, leastWidth: 205, mostWidth: 340 };
+
+/** The shortest form that still has every address: kind by kind, street by street. */
+function runningList(failing: NotMetReceptor[]): Content {
+  const kinds = [...new Set(failing.map((one) => one.class))];
+  return {
+    stack: kinds.map((kind) => {
+      const streets = new Map<string, string[]>();
+      for (const one of failing.filter((each) => each.class === kind)) {
+        const { before, house, street } = splitAddress(one.label);
+        const place = `${before}${street}`;
+        streets.set(place, [...(streets.get(place) ?? []), ...(house === '' ? [] : [house])]);
+      }
+      return {
+        text: [
+          { text: `${nameReceptors(kind)}: `, style: 'strong' },
+          [...streets.entries()]
+            .map(([place, houses]) => `${place} ${houses.join(', ')}`.trim())
+            .join('; '),
+          '.',
+        ],
+      };
+    }),
+    fontSize: 7,
+    lineHeight: 1.15,
+  };
+}
 
 function worstHour(scene: ReportScene): Content[] {
   const worst = findWorstInstant(scene);
