@@ -15,6 +15,8 @@ export const limits = {
   comment: { windowMs: 10 * minuteMs, limit: 20 },
   /** Work that costs much: uploads and studies. */
   heavy: { windowMs: minuteMs, limit: 30 },
+  /** Reading that is computed for each request: shadows of any instant, a receptor's ledger. */
+  compute: { windowMs: minuteMs, limit: 300 },
 } as const;
 export type LimitName = keyof typeof limits;
 
@@ -34,6 +36,7 @@ export function createRateLimits(): RateLimits {
     ],
     comment: [createLimit(limits.comment, byAddress)],
     heavy: [createLimit(limits.heavy, byAddress)],
+    compute: [createLimit(limits.compute, byAddress)],
   };
 }
 

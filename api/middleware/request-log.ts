@@ -17,13 +17,15 @@ export function requestLog(logger: Logger): RequestHandler {
       response.setHeader('X-Request-Id', id);
       return id;
     },
+    // Ours get the request and the error themselves, not pino's copies with headers and messages.
+    wrapSerializers: false,
     serializers: {
-      req: (request: { id: string; method: string; url: string }) => ({
+      req: (request: IncomingMessage & { originalUrl?: string }) => ({
         id: request.id,
         method: request.method,
-        path: request.url.split('?', 1)[0],
+        path: (request.originalUrl ?? request.url ?? '').split('?', 1)[0],
       }),
-      res: (response: { statusCode: number }) => ({ status: response.statusCode }),
+      res: (response: ServerResponse) => ({ status: response.statusCode }),
       err: serializeError,
     },
     customLogLevel: (_request, response, error) => {

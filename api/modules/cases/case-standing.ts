@@ -9,7 +9,8 @@ export interface CaseStanding {
   latestMassing: MassingRevision | null;
   /** The latest massing was uploaded before the site was picked anew. */
   isSiteNewer: boolean;
-  latestStudy: Study | null;
+  /** The latest first. */
+  studies: readonly Study[];
   /** A finished study of the latest massing. */
   hasFinishedStudy: boolean;
   /** A report on the latest massing. */
@@ -38,7 +39,7 @@ export async function loadCaseStandings(
         {
           latestMassing,
           isSiteNewer: latestMassing !== null && latestMassing.createdAt < one.siteSince,
-          latestStudy: own[0] ?? null,
+          studies: own,
           hasFinishedStudy: own.some(
             (study) => study.status === 'finished' && study.massing.id === latestMassing?.id,
           ),

@@ -1,8 +1,9 @@
 import { publicCaseStates } from '../../../shared/contracts/case-life.ts';
 import type { CaseDetail, CaseSummary } from '../../../shared/contracts/cases.ts';
-import { abilitiesOnCase, mayOnCase, transitionsOnCase } from '../../policy.ts';
+import { abilitiesOnCase, transitionsOnCase } from '../../policy.ts';
 import type { Actor } from '../../policy.ts';
 import type { Study } from '../studies/study.entity.ts';
+import { maySeeStudy } from '../studies/study.policy.ts';
 import type { CaseStanding } from './case-standing.ts';
 import type { CaseTransition } from './case-transition.entity.ts';
 import { caseFacts } from './get-case.ts';
@@ -15,9 +16,10 @@ export function presentCaseSummary(
   reviewCase: ReviewCase,
   standing: CaseStanding,
 ): CaseSummary {
-  const { latestMassing, latestStudy } = standing;
+  const { latestMassing, studies } = standing;
   const [longitude = 0, latitude = 0] = reviewCase.sitePoint.coordinates;
-  const maySeeStudy = mayOnCase(actor, 'read-study', caseFacts(reviewCase));
+  const facts = caseFacts(reviewCase);
+  const latestStudy = studies.find(({ status }) => maySeeStudy(actor, facts, status));
   return {
     reference: reviewCase.number ?? reviewCase.draftKey,
     number: reviewCase.number ?? null,
@@ -30,7 +32,7 @@ export function presentCaseSummary(
     latestRevision: latestMassing?.revision ?? null,
     heightM: latestMassing?.figures.heightM ?? null,
     storeys: latestMassing?.figures.storeys ?? null,
-    latestStudy: latestStudy !== null && maySeeStudy ? presentStudyInBrief(latestStudy) : null,
+    latestStudy: latestStudy === undefined ? null : presentStudyInBrief(latestStudy),
   };
 }
 

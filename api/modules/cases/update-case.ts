@@ -1,11 +1,11 @@
-import { LockMode } from '@mikro-orm/core';
 import type { EntityManager } from '@mikro-orm/postgresql';
 import type { z } from 'zod';
 import type { updateCaseInputSchema } from '../../../shared/contracts/cases.ts';
 import type { Actor } from '../../policy.ts';
-import { getCaseFor, requireOnCase } from './get-case.ts';
+import { getCaseFor } from './get-case.ts';
+import { lockCaseFor } from './lock-case.ts';
 import { pickSite } from './pick-site.ts';
-import { ReviewCase } from './review-case.entity.ts';
+import type { ReviewCase } from './review-case.entity.ts';
 
 /** Changes what the applicant wrote; fields that are left out stay. */
 export async function updateCase(
@@ -16,12 +16,7 @@ export async function updateCase(
 ): Promise<ReviewCase> {
   const seen = await getCaseFor(em, actor, reference, 'edit');
   return em.transactional(async (tx) => {
-    const reviewCase = await tx.findOneOrFail(ReviewCase, seen.id, {
-      lockMode: LockMode.PESSIMISTIC_WRITE,
-      refresh: true,
-    });
-    // It may have been submitted since it was looked at.
-    requireOnCase(actor, 'edit', reviewCase);
+    const reviewCase = await lockCaseFor(tx, actor, seen.id, 'edit');
     if (title !== undefined) reviewCase.title = title;
     if (description !== undefined) reviewCase.description = description;
     if (siteParcels !== undefined && isOtherSite(reviewCase.siteParcels, siteParcels)) {
