@@ -97,6 +97,7 @@ export const studyEndpoints = [
     access: 'anybody',
     params: studyParams,
     query: shadowsQuerySchema,
+    limit: 'compute',
     response: instantShadowsSchema,
     handler: ({ em, actor, params, query, deps }) =>
       getStudyShadows(em, deps.clipper, actor, params.id, query.at),
@@ -156,6 +157,7 @@ export const studyEndpoints = [
     summary: 'One receptor: its findings and its sun ledger on the key dates.',
     access: 'anybody',
     params: studyParams.extend({ receptor: z.string().min(1).max(100) }),
+    limit: 'compute',
     response: receptorDetailSchema,
     handler: ({ em, actor, params }) => getReceptor(em, actor, params.id, params.receptor),
   }),

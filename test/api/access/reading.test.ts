@@ -1,5 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { CaseState } from '../../../shared/contracts/case-life.ts';
+import { caseDetailSchema } from '../../../shared/contracts/cases.ts';
 import { reportSchema } from '../../../shared/contracts/reports.ts';
 import { buildSmallCity } from '../../support/small-city.ts';
 import {
@@ -46,6 +47,7 @@ beforeAll(async () => {
   const ofCase = `/api/cases/${reference}`;
   const ofStudy = `/api/studies/${finished.id}`;
   for (const [name, path] of Object.entries({
+    case: ofCase,
     massings: `${ofCase}/massings`,
     massing: `${ofCase}/massings/1`,
     original: `${ofCase}/massings/1/original`,
@@ -137,6 +139,19 @@ describe.each(['open-for-comment', 'heard', 'refused'] as CaseState[])(
       };
       expect(await list('public')).toEqual(['finished']);
       expect(await list('planner')).toEqual(['queued', 'finished']);
+    });
+
+    it("the case's page names the latest study that its reader may see", async () => {
+      const latest = async (reader: Reader) => {
+        const body = await bodyOf(
+          agentOf(reader)
+            .get(paths.get('case') ?? '')
+            .expect(200),
+        );
+        return caseDetailSchema.parse(body).latestStudy?.status;
+      };
+      expect(await latest('public')).toBe('finished');
+      expect(await latest('owner')).toBe('queued');
     });
 
     it('what is not finished has no evidence', async () => {
