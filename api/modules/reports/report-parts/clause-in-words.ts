@@ -119,7 +119,9 @@ function sayHours(
 
 function sayWindow(window: RuleWindow, figures: FigureFormat): string {
   if (window.basis === 'sun') {
-    return `from ${figures.whole(window.afterSunrise)} min after sunrise to ${figures.whole(window.beforeSunset)} min before sunset`;
+    const edge = (minutes: number, words: string) =>
+      minutes === 0 ? '' : `${figures.whole(minutes)} min ${words} `;
+    return `from ${edge(window.afterSunrise, 'after')}sunrise to ${edge(window.beforeSunset, 'before')}sunset`;
   }
   if (window.from === window.to) return `at ${window.from}, ${basisWords[window.basis]}`;
   return `from ${window.from} to ${window.to}, ${basisWords[window.basis]}`;

@@ -17,6 +17,8 @@ export const styles: StyleDictionary = {
   label: { fontSize: 6.8, color: palette.inkLight, characterSpacing: 0.55 },
   small: { fontSize: 7.5, color: palette.inkLight, lineHeight: 1.25 },
   cell: { fontSize: 8.5, lineHeight: 1.15 },
+  /** With a unit of several signs. */
+  longFigure: { fontSize: 7, lineHeight: 1.3, alignment: 'right', fontFeatures: ['tnum'] },
   figure: { fontSize: 8.5, lineHeight: 1.15, alignment: 'right', fontFeatures: ['tnum'] },
 };
 

@@ -107,7 +107,7 @@ function findingCells(scene: ReportScene, row: FindingRow): TableCell[] {
   const number = notMet.find((one) => one.receptor === row.receptor)?.number;
   const figure = (value: number): Content => ({
     text: figures.inUnit(value, row.unit),
-    style: 'figure',
+    style: row.unit === 'h' ? 'figure' : 'longFigure',
   });
   return [
     { text: number === undefined ? '' : String(number), style: 'strong', color: palette.madder },
@@ -129,7 +129,7 @@ function findingCells(scene: ReportScene, row: FindingRow): TableCell[] {
     figure(row.after),
     figure(row.lost),
     figure(row.limit),
-    { text: sayMargin(row, scene), style: 'figure' },
+    { text: sayMargin(row, scene), style: row.unit === 'h' ? 'figure' : 'longFigure' },
     {
       stack: [
         findingMark(row.finding),

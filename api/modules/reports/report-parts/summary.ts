@@ -221,7 +221,7 @@ function figuresTable(failing: NotMetReceptor[], clause: string, scene: ReportSc
   const { figures, time } = scene;
   return {
     table: {
-      widths: [16, '*', 62, 56, 74, 62, 56],
+      widths: [16, '*', 56, 36, 58, 58, 58],
       headerRows: 1,
       body: [
         [
