@@ -99,7 +99,10 @@ export async function buildLarkhavenPayload(): Promise<ReportPayload> {
     baseM: number;
     topM: number;
     heightSource: string;
-  }>('buildings').filter((one) => isNear(one) && !siteNumbers.includes(one.properties.parcel));
+  }>('buildings').filter(isNear);
+  const contextBuildings = buildings.filter(
+    ({ properties }) => !siteNumbers.includes(properties.parcel),
+  );
   const yards = readLayer<{ id: string; parcel: string; label: string }>('yards').filter(isNear);
   const openSpace = readLayer<{ id: string; class: 'open-space' | 'walk'; name: string }>(
     'open-space',
@@ -131,7 +134,7 @@ export async function buildLarkhavenPayload(): Promise<ReportPayload> {
     site,
     blocks: {
       features: [
-        ...buildings.map(({ properties, geometry }) => ({
+        ...contextBuildings.map(({ properties, geometry }) => ({
           properties: {
             id: properties.id,
             role: 'context',

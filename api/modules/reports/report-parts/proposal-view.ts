@@ -42,7 +42,7 @@ function drawView(scene: ReportScene, width: number, height: number): string {
       sitePoints.some(([siteX, siteY]) => Math.hypot(x - siteX, y - siteY) < drawnAroundM),
     );
   const blocks: AxonometricBlock[] = [
-    ...payload.surroundings.buildings
+    ...scene.around
       .filter(({ geometry }) => isNear(geometry))
       .map(({ geometry, baseM, topM }) => ({ geometry, baseM, topM, role: 'context' as const })),
     ...payload.revision.blocks

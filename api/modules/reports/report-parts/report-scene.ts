@@ -7,6 +7,7 @@ import { emptyPlan, type PlanContent } from '../../../../shared/drawing/plan-dra
 import type { ReceptorClass } from '../../../../shared/rules/rule-schema.ts';
 import type { ReportInstant, ReportPayload } from '../report-payload.ts';
 import { listNotMet, type NotMetReceptor } from './not-met.ts';
+import { standsOnSite } from './stands-on-site.ts';
 
 /** What all parts of a report share: the payload, its place's forms of figures, and what follows from it. */
 export interface ReportScene {
@@ -15,6 +16,8 @@ export interface ReportScene {
   figures: FigureFormat;
   /** Receptors that don't meet a clause, each with the number that marks it on maps and in tables. */
   notMet: NotMetReceptor[];
+  /** The buildings that stand around the site; those on it are removed by the proposal. */
+  around: ReportPayload['surroundings']['buildings'];
   /** The plan without shadows, to be drawn at any size. */
   plan: PlanContent;
   /** Centre of the local plane. */
@@ -25,8 +28,13 @@ export function createReportScene(payload: ReportPayload): ReportScene {
   const { municipality, surroundings, revision } = payload;
   const notMet = listNotMet(payload);
   const outlines = new Map(payload.receptors.map((one) => [one.id, one.geometry]));
+  const onSite = surroundings.buildings.filter(({ geometry }) =>
+    standsOnSite(geometry, payload.site),
+  );
+  const around = surroundings.buildings.filter((building) => !onSite.includes(building));
   return {
     payload,
+    around,
     time: createCivilTimeFormat(municipality.locale, municipality.timeZone),
     figures: createFigureFormat(municipality.locale),
     notMet,
@@ -41,9 +49,9 @@ export function createReportScene(payload: ReportPayload): ReportScene {
       water: surroundings.water,
       openSpace: surroundings.openSpace,
       parcels: surroundings.parcels.map(({ geometry }) => geometry),
-      buildings: surroundings.buildings.map(({ geometry }) => geometry),
+      buildings: around.map(({ geometry }) => geometry),
       site: [payload.site],
-      removed: blocksOf('existing').map(({ geometry }) => geometry),
+      removed: [...blocksOf('existing'), ...onSite].map(({ geometry }) => geometry),
       proposal: blocksOf('proposed').map(({ geometry, properties }) => ({
         geometry,
         topM: properties.topM,

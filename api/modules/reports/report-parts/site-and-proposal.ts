@@ -83,9 +83,9 @@ function right(text: string): Content {
 }
 
 /** Where the heights of what stands around come from: the accuracy of every shadow hangs on it. */
-function sayHeightSources({ payload, figures }: ReportScene): string {
+function sayHeightSources({ around, figures }: ReportScene): string {
   const counts = new Map<string, number>();
-  for (const { heightSource } of payload.surroundings.buildings) {
+  for (const { heightSource } of around) {
     counts.set(heightSource, (counts.get(heightSource) ?? 0) + 1);
   }
   if (counts.size === 0) return 'no building stands within reach of the shadow';
