@@ -15,13 +15,13 @@ export function SearchForm({ label, value, onSearch, placeholder }: SearchFormPr
   return (
     <search>
       <form
-        className="flex max-w-xl flex-wrap items-end gap-3"
+        className="flex max-w-xl items-end gap-3"
         onSubmit={(event) => {
           event.preventDefault();
           onSearch(text.trim());
         }}
       >
-        <label className="grid grow gap-1">
+        <label className="grid min-w-0 grow gap-1">
           <span className="font-strong">{label}</span>
           <input
             type="search"

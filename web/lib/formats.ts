@@ -19,6 +19,11 @@ export function createFormats({ locale, timeZone }: FormatSettings) {
   const civil = createCivilTimeFormat(locale, timeZone);
   const figure = createFigureFormat(locale);
   const shortDateFormat = new Intl.DateTimeFormat(locale, { dateStyle: 'medium', timeZone });
+  // A figure and its unit stay on one line.
+  const whole =
+    <Arguments extends unknown[]>(write: (...values: Arguments) => string) =>
+    (...values: Arguments) =>
+      write(...values).replaceAll(' ', '\u00a0');
   const number = (value: number, decimals = 0) =>
     new Intl.NumberFormat(locale, {
       minimumFractionDigits: decimals,
@@ -34,11 +39,11 @@ export function createFormats({ locale, timeZone }: FormatSettings) {
     /** `1,240.5` */
     number,
     /** `1:10 p.m.` */
-    clock: civil.clock,
+    clock: whole(civil.clock),
     /** `CST` */
     zone: civil.zone,
     /** `1:10 p.m. CST` */
-    clockWithZone: civil.clockWithZone,
+    clockWithZone: whole(civil.clockWithZone),
     /** `December 21, 2026, 1:10 p.m. CST` */
     instant: civil.dateAndClock,
     /** The civil day of an instant: `December 21, 2026` */
@@ -50,21 +55,21 @@ export function createFormats({ locale, timeZone }: FormatSettings) {
     /** A civil day without its year: `December 21` */
     dayOfYear: civil.monthAndDay,
     /** `44.0 m` */
-    length: figure.length,
+    length: whole(figure.length),
     /** `1,240 m²` */
-    area: figure.area,
+    area: whole(figure.area),
     /** `21,600 m³` */
-    volume: (cubicMetres: number) => `${figure.whole(cubicMetres)} m³`,
+    volume: whole((cubicMetres: number) => `${figure.whole(cubicMetres)} m³`),
     /** `19.7°` */
     angle: figure.angle,
     /** A share from 0 to 1: `18%` */
     share: figure.percent,
     /** `0.42 kWh/m²` */
-    energy: (kwhPerM2: number) => figure.inUnit(kwhPerM2, 'kWh/m²'),
+    energy: whole((kwhPerM2: number) => figure.inUnit(kwhPerM2, 'kWh/m²')),
     /** `3 h 05 min`, `50 min`; `none` for no time at all. */
-    hours: figure.duration,
+    hours: whole(figure.duration),
     /** A value in the unit of a rule's measure. */
-    inUnit: figure.inUnit,
+    inUnit: whole(figure.inUnit),
     /** `1.4 MB` */
     fileSize: (bytes: number) =>
       bytes < 1_000_000
