@@ -1,6 +1,6 @@
 import { createBrowserRouter } from 'react-router-dom';
 import { Loading } from '../components/loading.tsx';
-import { deskRoutes } from './desk-routes.ts';
+import { deskCaseRoutes, deskRoutes } from './desk-routes.ts';
 import { AppLayout } from './layouts/app-layout.tsx';
 import { RequireRole } from './layouts/require-role.tsx';
 import { ErrorPage } from './pages/error-page.tsx';
@@ -77,6 +77,7 @@ export const router = createBrowserRouter([
                   Component: (await import('./pages/hearings-page.tsx')).HearingsPage,
                 }),
               },
+              ...deskCaseRoutes,
             ],
           },
           {

@@ -1,5 +1,9 @@
 import { useMemo } from 'react';
-import type { InstantShadows, StudyDetail, FindingRow } from '../../../../shared/contracts/studies.ts';
+import type {
+  InstantShadows,
+  StudyDetail,
+  FindingRow,
+} from '../../../../shared/contracts/studies.ts';
 import { drawPlan, emptyPlan } from '../../../../shared/drawing/plan-drawing.ts';
 import { titleBlockRows, type TitleBlock } from '../../../../shared/drawing/title-block.ts';
 import type { Polygonal } from '../../../../shared/geometry/geojson-schema.ts';
