@@ -1,5 +1,6 @@
 import type { FindingRow } from '../../../../shared/contracts/studies.ts';
 import type { ReportPayload } from '../report-payload.ts';
+import { compareAddresses } from './addresses.ts';
 
 /** A receptor that doesn't meet at least one clause. */
 export interface NotMetReceptor {
@@ -48,23 +49,4 @@ export function listNotMet({ findingRows, study, municipality }: ReportPayload):
     })
     .sort((a, b) => compare(a.label, b.label) || (a.receptor < b.receptor ? -1 : 1))
     .map((one, index) => ({ number: index + 1, ...one }));
-}
-
-/** By street, then by house number: `9 Oarlock Shore` before `12 Oarlock Shore`, both before `2 Saltpan Quay`. */
-export function compareAddresses(locale: string): (a: string, b: string) => number {
-  const collator = new Intl.Collator(locale, { numeric: true });
-  return (a, b) => {
-    const [first, second] = [splitAddress(a), splitAddress(b)];
-    return (
-      collator.compare(first.street, second.street) ||
-      collator.compare(first.house, second.house) ||
-      collator.compare(a, b)
-    );
-  };
-}
-
-/** `Rear yard, 9 Oarlock Shore` as what stands before the address, house and street; a label without a house is all street. */
-export function splitAddress(label: string): { before: string; house: string; street: string } {
-  const parts = /^(.*?,\s*)?(\d+\S*)\s+(.+)$/.exec(label);
-  return { before: parts?.[1] ?? '', house: parts?.[2] ?? '', street: parts?.[3] ?? label };
 }

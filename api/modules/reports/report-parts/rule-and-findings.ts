@@ -2,9 +2,9 @@ import type { Content, TableCell } from 'pdfmake/interfaces';
 import type { FindingRow } from '../../../../shared/contracts/studies.ts';
 import { palette } from '../../../../shared/drawing/palette.ts';
 import type { RuleClause } from '../../../../shared/rules/rule-schema.ts';
+import { compareAddresses, sayByStreet } from './addresses.ts';
 import { sayClause } from './clause-in-words.ts';
 import { findingMark } from './finding-mark.ts';
-import { compareAddresses } from './not-met.ts';
 import { definitions, hairlineTable, heading, label, subheading } from './report-look.ts';
 import { nameReceptorClass, nameReceptors, type ReportScene } from './report-scene.ts';
 
@@ -169,7 +169,7 @@ function notAffected({ payload, figures }: ReportScene, rows: readonly FindingRo
           text: `${nameReceptors(receptorClass)}, ${figures.whole(labels.length)}: `,
           style: 'strong',
         },
-        `${labels.sort(compare).join('; ')}.`,
+        `${sayByStreet(labels.sort(compare))}.`,
       ],
       style: 'small',
       fontSize: 7,

@@ -2,9 +2,10 @@ import type { Content } from 'pdfmake/interfaces';
 import { palette } from '../../../../shared/drawing/palette.ts';
 import { element, svgDocument } from '../../../../shared/drawing/svg.ts';
 import type { RuleClause } from '../../../../shared/rules/rule-schema.ts';
+import { sayByStreet } from './addresses.ts';
 import { sayClause } from './clause-in-words.ts';
 import { findingMark } from './finding-mark.ts';
-import { splitAddress, type NotMetReceptor } from './not-met.ts';
+import type { NotMetReceptor } from './not-met.ts';
 import { drawKeyedPlan, drawNorthAndScale, drawTitle } from './plan-sheets.ts';
 import { hairlineTable, label, page, rule } from './report-look.ts';
 import {
@@ -283,23 +284,12 @@ const room = { withoutLines: 330, aLine: 14, aClause: 46, leastWidth: 205, mostW
 function runningList(failing: NotMetReceptor[]): Content {
   const kinds = [...new Set(failing.map((one) => one.class))];
   return {
-    stack: kinds.map((kind) => {
-      const streets = new Map<string, string[]>();
-      for (const one of failing.filter((each) => each.class === kind)) {
-        const { before, house, street } = splitAddress(one.label);
-        const place = `${before}${street}`;
-        streets.set(place, [...(streets.get(place) ?? []), ...(house === '' ? [] : [house])]);
-      }
-      return {
-        text: [
-          { text: `${nameReceptors(kind)}: `, style: 'strong' },
-          [...streets.entries()]
-            .map(([place, houses]) => `${place} ${houses.join(', ')}`.trim())
-            .join('; '),
-          '.',
-        ],
-      };
-    }),
+    stack: kinds.map((kind) => ({
+      text: [
+        { text: `${nameReceptors(kind)}: `, style: 'strong' },
+        `${sayByStreet(failing.filter((one) => one.class === kind).map((one) => one.label))}.`,
+      ],
+    })),
     fontSize: 7,
     lineHeight: 1.15,
   };
