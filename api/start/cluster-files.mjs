@@ -1,4 +1,4 @@
-import { mkdirSync, renameSync, rmSync, writeFileSync } from 'node:fs';
+import { mkdirSync, readdirSync, renameSync, rmSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
 
 import { isClusterFolder } from './cluster-place.mjs';
@@ -12,6 +12,7 @@ import { Problem } from './problem.mjs';
 export const POSTGRES_PROGRAMS = '/usr/lib/postgresql/15/bin';
 export const SUPERUSER = 'postgres';
 const POSTGRES_VERSION = '15';
+const PARTIAL_SUFFIX = '.partial-';
 
 /**
  * Makes the cluster's files unless they are there. They are made beside their place and moved to it
@@ -33,13 +34,12 @@ export async function makeClusterFiles(lifetime, { folder, asUser }, use) {
     }
     return false;
   }
-  const partialFolder = `${folder}.partial`;
-  const passwordFile = `${folder}.password`;
-  rmSync(partialFolder, { recursive: true, force: true });
   mkdirSync(path.dirname(folder), { recursive: true, mode: 0o711 });
+  removePartialFolders(folder);
+  // A name of its own: the initdb of a launcher that was killed may still be busy with the earlier one.
+  const partialFolder = `${folder}${PARTIAL_SUFFIX}${process.pid}`;
+  const passwordFile = `${partialFolder}.password`;
   mkdirSync(partialFolder, { mode: 0o700 });
-  const takeAwayPassword = () => rmSync(passwordFile, { force: true });
-  const forget = lifetime.hold(takeAwayPassword);
   try {
     const password = use === 'test' ? 'test' : use.superuserPassword;
     writeFileSync(passwordFile, password, { mode: 0o600 });
@@ -60,12 +60,23 @@ export async function makeClusterFiles(lifetime, { folder, asUser }, use) {
     if (!result.isOk) {
       throw new Problem(`The database could not be made in ${folder}:`, result.output);
     }
+    rmSync(passwordFile);
+    renameSync(partialFolder, folder);
   } finally {
-    forget();
-    takeAwayPassword();
+    removePartialFolders(folder);
   }
-  renameSync(partialFolder, folder);
   return true;
+}
+
+/**
+ * @param {string} folder of the cluster, beside which an interrupted start may have left something
+ */
+function removePartialFolders(folder) {
+  const prefix = path.basename(folder) + PARTIAL_SUFFIX;
+  for (const name of readdirSync(path.dirname(folder))) {
+    if (!name.startsWith(prefix)) continue;
+    rmSync(path.join(path.dirname(folder), name), { recursive: true, force: true, maxRetries: 5 });
+  }
 }
 
 /**

@@ -15,8 +15,8 @@ const NEEDED_BYTES = 300 * 1024 * 1024;
 export function openDataFolder(folder, neededBytes = NEEDED_BYTES) {
   try {
     // Root's database runs as another user, who must be able to pass through, not to look around.
-    fs.mkdirSync(folder, { recursive: true, mode: process.getuid?.() === 0 ? 0o711 : 0o700 });
-    fs.mkdirSync(path.join(folder, 'log'), { recursive: true, mode: 0o700 });
+    makeFolder(folder, process.getuid?.() === 0 ? 0o711 : 0o700);
+    makeFolder(path.join(folder, 'log'), 0o700);
     const probe = path.join(folder, '.writable');
     fs.writeFileSync(probe, 'probe');
     fs.rmSync(probe);
@@ -35,6 +35,18 @@ export function openDataFolder(folder, neededBytes = NEEDED_BYTES) {
 }
 
 /**
+ * Makes the folder and its parents. (Node's own recursive way never ends in places such as /proc.)
+ *
+ * @param {string} folder
+ * @param {number} mode
+ */
+function makeFolder(folder, mode) {
+  if (fs.statSync(folder, { throwIfNoEntry: false })?.isDirectory()) return;
+  makeFolder(path.dirname(folder), mode);
+  fs.mkdirSync(folder, { mode });
+}
+
+/**
  * @param {string} folder
  * @param {unknown} error
  * @returns {unknown} a problem where a person can mend it
@@ -46,6 +58,7 @@ export function describeWriteError(folder, error) {
     EROFS: 'it is on a read-only file system',
     ENOSPC: 'the disk is full',
     EDQUOT: "this user's disk quota is used up",
+    ENOENT: 'no folder can be made there',
     ENOTDIR: 'a file stands in its place',
     EEXIST: 'a file stands in its place',
   }[errorCode(error)];

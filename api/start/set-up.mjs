@@ -4,7 +4,7 @@ import { DATABASE_PACKAGES, installMissingPackages } from './debian-packages.mjs
 import { installNodeModules } from './node-modules.mjs';
 import { startOwnDatabase } from './own-database.mjs';
 import { Problem } from './problem.mjs';
-import { readOrMakeSecrets } from './secrets.mjs';
+import { readOrMakeSecrets, readSecrets } from './secrets.mjs';
 import { describeDatabase } from './settings.mjs';
 
 /** @typedef {import('./lifetime.mjs').Lifetime} Lifetime */
@@ -28,6 +28,7 @@ import { describeDatabase } from './settings.mjs';
  */
 export async function setUp(lifetime, say, settings) {
   const { projectFolder, dataFolder } = settings;
+  if (readSecrets(dataFolder) === null) say.line('The first start takes a few minutes.');
   if (!settings.operatorDatabase) {
     await installPackagesStep(lifetime, say, DATABASE_PACKAGES);
   }

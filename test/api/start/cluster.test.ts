@@ -1,5 +1,5 @@
 import { execFileSync, spawn } from 'node:child_process';
-import { existsSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs';
+import { existsSync, mkdirSync, readFileSync, readdirSync, writeFileSync } from 'node:fs';
 import net from 'node:net';
 import path from 'node:path';
 import { describe, expect, it, onTestFinished } from 'vitest';
@@ -99,15 +99,15 @@ describe('a cluster of our own', () => {
   it('is made afresh when the first start was interrupted half-way', async () => {
     const { lifetime, dataFolder } = prepareTest();
     const place = await findClusterPlace(lifetime, dataFolder);
-    const partialFolder = `${place.folder}.partial`;
+    const partialFolder = `${place.folder}.partial-1`;
     mkdirSync(partialFolder);
     writeFileSync(path.join(partialFolder, 'PG_VERSION'), '15\n');
-    writeFileSync(`${place.folder}.password`, 'left behind');
+    writeFileSync(`${partialFolder}.password`, 'left behind');
 
     expect(await makeClusterFiles(lifetime, place, 'test')).toBe(true);
     expect(existsSync(path.join(place.folder, 'global/pg_control'))).toBe(true);
     expect(existsSync(partialFolder)).toBe(false);
-    expect(existsSync(`${place.folder}.password`)).toBe(false);
+    expect(existsSync(`${partialFolder}.password`)).toBe(false);
     expect(await makeClusterFiles(lifetime, place, 'test')).toBe(false);
   });
 
@@ -117,7 +117,7 @@ describe('a cluster of our own', () => {
     const making = makeClusterFiles(lifetime, place, 'test');
     await lifetime.stop();
     await expect(making).rejects.toThrow();
-    expect(existsSync(place.folder)).toBe(false);
+    expect(readdirSync(path.dirname(place.folder))).toEqual([]);
   });
 
   it('of another version of PostgreSQL is not touched', async () => {

@@ -18,6 +18,10 @@ describe('openDataFolder', () => {
     expect(() => openDataFolder(path.join(file, 'deeper'))).toThrow('a file stands in its place');
   });
 
+  it('ends with a sentence where no folder can be made at all', () => {
+    expect(() => openDataFolder('/proc/noonmark')).toThrow("can't be used");
+  });
+
   it('says how much room is missing on the disk', () => {
     const folder = path.join(makeTemporaryFolder(), 'data');
     expect(() => openDataFolder(folder, 2 ** 60)).toThrow(/has \d+ MB left; Noonmark needs \d+ MB/);
