@@ -9,6 +9,7 @@ import {
   studyDetailSchema,
   studyListSchema,
 } from '../../../shared/contracts/studies.ts';
+import type { StudyDetail } from '../../../shared/contracts/studies.ts';
 import { defineEndpoint, defineRawEndpoint } from '../../endpoint.ts';
 import { cancelStudy } from './cancel-study.ts';
 import { describeStudy } from './describe-study.ts';
@@ -54,8 +55,11 @@ export const studyEndpoints = [
     params: caseParams,
     response: studyListSchema,
     handler: async ({ em, actor, params }) => {
-      const studies = await listStudies(em, actor, params.number);
-      return { rows: await Promise.all(studies.map((study) => describeStudy(em, study))) };
+      const rows: StudyDetail[] = [];
+      for (const study of await listStudies(em, actor, params.number)) {
+        rows.push(await describeStudy(em, study));
+      }
+      return { rows };
     },
   }),
   defineEndpoint({

@@ -2,6 +2,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { CaseState } from '../../../shared/contracts/case-life.ts';
 import { caseDetailSchema } from '../../../shared/contracts/cases.ts';
 import { reportSchema } from '../../../shared/contracts/reports.ts';
+import { studyListSchema } from '../../../shared/contracts/studies.ts';
 import { buildSmallCity } from '../../support/small-city.ts';
 import {
   createReviewedCase,
@@ -135,7 +136,7 @@ describe.each(['open-for-comment', 'heard', 'refused'] as CaseState[])(
       expect(await statusesFor('waiting study')).toEqual(thoseAtWork);
       const list = async (reader: Reader) => {
         const body = await bodyOf(agentOf(reader).get(paths.get('studies') ?? ''));
-        return (body as { rows: { status: string }[] }).rows.map(({ status }) => status);
+        return studyListSchema.parse(body).rows.map(({ status }) => status);
       };
       expect(await list('public')).toEqual(['finished']);
       expect(await list('planner')).toEqual(['queued', 'finished']);

@@ -3,7 +3,9 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import {
   massingComparisonSchema,
   massingDetailSchema,
+  massingListSchema,
 } from '../../../shared/contracts/massings.ts';
+import { problemSchema } from '../../../shared/contracts/problem.ts';
 import { buildSmallCity, cottage, massingFile, tower } from '../../support/small-city.ts';
 import { bodyOf, startTestApi, type Agent, type TestApi } from '../../support/test-api.ts';
 
@@ -23,7 +25,7 @@ function upload(agent: Agent, reference: string, bytes: Buffer, fileName = 'mass
 
 async function revisionsOf(reference: string): Promise<unknown[]> {
   const body = await bodyOf(owner.get(`/api/cases/${reference}/massings`).expect(200));
-  return (body as { rows: unknown[] }).rows;
+  return massingListSchema.parse(body).rows;
 }
 
 describe('uploading a massing', () => {
@@ -62,10 +64,10 @@ describe('uploading a massing', () => {
     const body = await bodyOf(
       upload(owner, reference, Buffer.from('no massing'), 'a.txt').expect(422),
     );
-    expect(body).toMatchObject({ code: 'MASSING_UNREADABLE' });
-    const { errors } = body as { errors: { path: string; message: string }[] };
+    const { code, errors } = problemSchema.parse(body);
+    expect(code).toBe('MASSING_UNREADABLE');
     expect(errors).toHaveLength(1);
-    expect(errors[0]?.message).toContain('a.txt');
+    expect(errors?.[0]?.message).toContain('a.txt');
     expect(await revisionsOf(reference)).toEqual([]);
   });
 

@@ -1,7 +1,9 @@
 import { createHash } from 'node:crypto';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { renderReportApart } from '../../../api/modules/reports/render-report-apart.ts';
 import { renderReport } from '../../../api/modules/reports/render-report.ts';
 import { Report } from '../../../api/modules/reports/report.entity.ts';
+import { commentReceiptSchema } from '../../../shared/contracts/comments.ts';
 import { reportListSchema, reportSchema } from '../../../shared/contracts/reports.ts';
 import type { StudyDetail } from '../../../shared/contracts/studies.ts';
 import { buildSmallCity, cottage } from '../../support/small-city.ts';
@@ -88,6 +90,16 @@ describe('issuing a report', () => {
     expect(again.pages).toBe(report.pages);
   });
 
+  it('hands on what goes wrong in the thread that draws it', async () => {
+    const { reference } = await createStudiedCase();
+    const { number } = reportSchema.parse(await bodyOf(issue(reference).expect(201)));
+    const { payload } = await api.orm.em
+      .fork()
+      .findOneOrFail(Report, { number }, { populate: ['payload'] });
+    // A table that leaves out what the findings name is never drawn.
+    await expect(renderReportApart({ ...payload, findingRows: [] })).rejects.toThrow();
+  });
+
   it('puts in every receptor that does not meet the rule, the comments, and the words of the planner', async () => {
     const { reference } = await createStudiedCase();
     const neighbour = await api.signIn('public');
@@ -98,7 +110,7 @@ describe('issuing a report', () => {
         body: 'My tomatoes get the noon sun.',
       }),
     );
-    const { id } = comment as { id: string };
+    const { id } = commentReceiptSchema.parse(comment);
     await planner.patch(`/api/comments/${id}`).send({ state: 'published' }).expect(200);
     const { number } = reportSchema.parse(await bodyOf(issue(reference).expect(201)));
     const { payload } = await api.orm.em

@@ -1,4 +1,4 @@
-import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { requestStudy as requestStudyInside } from '../../../api/modules/studies/request-study.ts';
 import { runStudy } from '../../../api/modules/studies/run-study.ts';
 import { saveStudyResults } from '../../../api/modules/studies/save-study-results.ts';
@@ -9,19 +9,9 @@ import {
   requeueDeadStudies,
 } from '../../../api/modules/studies/study-run.ts';
 import { Study } from '../../../api/modules/studies/study.entity.ts';
-import { studyProgressSchema } from '../../../shared/contracts/studies.ts';
 import { evidenceFileSchema, type EvidenceFile } from '../../../shared/study/evidence-schema.ts';
-import { buildSmallCity, massingFile, smallCityRule, tower } from '../../support/small-city.ts';
-import {
-  createReviewedCase,
-  endWorker,
-  hasEnded,
-  readStudy,
-  requestStudy,
-  spawnWorker,
-  startTestWorker,
-  waitForStudy,
-} from '../../support/study-worker.ts';
+import { buildSmallCity, massingFile } from '../../support/small-city.ts';
+import { createReviewedCase, readStudy, requestStudy } from '../../support/study-worker.ts';
 import { bodyOf, startTestApi, type Agent, type TestApi } from '../../support/test-api.ts';
 
 let api: TestApi;
@@ -29,23 +19,10 @@ let planner: Agent;
 
 beforeAll(async () => {
   api = await startTestApi();
-  // Every minute of four hours on each day of December: some seconds of work, enough to break into.
-  await buildSmallCity(
-    api.orm,
-    smallCityRule({ step: 1, days: [{ from: '12-01', to: '12-31', everyDays: 1 }] }),
-  );
+  await buildSmallCity(api.orm);
   planner = await api.signIn('planner');
 });
-// What a test leaves under way must not keep the next one's worker busy.
-afterEach(async () => {
-  await api.orm.em
-    .fork()
-    .execute(`update study set status = 'cancelled' where status in ('queued', 'running')`);
-});
 afterAll(() => api.close());
-
-const isUnderWay = ({ status, instantsDone }: { status: string; instantsDone: number }) =>
-  status === 'running' && instantsDone > 0;
 
 async function run(studyId: string): Promise<void> {
   const { orm, queue, clipper, logger } = api.deps;
@@ -75,7 +52,7 @@ describe('requesting a study', () => {
     const { reference } = await createReviewedCase(api);
     const study = await requestStudy(planner, reference);
     expect(study).toMatchObject({ status: 'queued', revision: 1, year: 2026, findings: null });
-    expect(study.rule.clauses[0]?.days).toHaveLength(31);
+    expect(study.rule.clauses[0]?.days).toHaveLength(1);
     expect(await waitingJobs()).toBe(before + 1);
     const body = await bodyOf(planner.post(`/api/cases/${reference}/studies`).expect(409));
     expect(body).toMatchObject({ code: 'STUDY_RUNNING' });
@@ -125,47 +102,7 @@ describe('requesting a study', () => {
   });
 });
 
-describe('a running study', () => {
-  it('shows its progress to other processes, as numbers and as events', async () => {
-    const { reference } = await createReviewedCase(api);
-    const { id } = await requestStudy(planner, reference);
-    const events = planner
-      .get(`/api/studies/${id}/events`)
-      .buffer(true)
-      .then(({ text }) => text);
-    const worker = spawnWorker(api);
-    await waitForStudy(planner, id, isUnderWay);
-    const told = (await events)
-      .split('\n\n')
-      .filter((event) => event.startsWith('event: progress'))
-      .map((event) => studyProgressSchema.parse(JSON.parse(event.split('data: ')[1] ?? '')));
-    await endWorker(worker, 'SIGTERM');
-    const { instantsTotal } = await readStudy(planner, id);
-    // Every minute from 10:00 to 14:00 on 31 days, and the hours of the key dates beside them.
-    expect(instantsTotal).toBeGreaterThan(31 * 241);
-    expect(told[0]).toEqual({ status: 'queued', instantsDone: 0, instantsTotal: 0 });
-    expect(told.some(isUnderWay)).toBe(true);
-    expect(told.at(-1)).toEqual({
-      status: 'finished',
-      instantsDone: instantsTotal,
-      instantsTotal,
-    });
-  });
-
-  it('stops after it is cancelled and stores no result', async () => {
-    const { reference } = await createReviewedCase(api);
-    const { id } = await requestStudy(planner, reference);
-    const worker = spawnWorker(api);
-    await waitForStudy(planner, id, isUnderWay);
-    const body = await bodyOf(planner.post(`/api/studies/${id}/cancel`).expect(200));
-    expect(body).toMatchObject({ status: 'cancelled' });
-    // Told to stop, the worker goes when it has let go of the study.
-    await endWorker(worker, 'SIGTERM');
-    const study = await readStudy(planner, id);
-    expect(study).toMatchObject({ status: 'cancelled', digest: null, findings: null });
-    expect(study.instantsDone).toBeLessThan(study.instantsTotal);
-  });
-
+describe('a study of bad data', () => {
   it('ends as failed, with a sentence, where its data make no valid study', async () => {
     const { reference } = await createReviewedCase(api);
     const { id } = await requestStudy(planner, reference);
@@ -233,33 +170,5 @@ describe('a study and its workers', () => {
     const study = await readStudy(planner, id);
     expect(study.status).toBe('failed');
     expect(study.failure).toContain('3 times');
-  });
-
-  it('is finished by another worker when the first is killed in the middle', async () => {
-    const { reference } = await createReviewedCase(api, tower);
-    const { id } = await requestStudy(planner, reference);
-    const killed = spawnWorker(api);
-    await waitForStudy(planner, id, isUnderWay);
-    await endWorker(killed, 'SIGKILL');
-    expect(await readStudy(planner, id)).toMatchObject({ status: 'running' });
-    // The time after which a silent run is taken for dead.
-    await passTime(id);
-    const worker = await startTestWorker(api);
-    const study = await waitForStudy(planner, id, hasEnded);
-    await worker.stop();
-    expect(study).toMatchObject({ status: 'finished', failure: null });
-  });
-
-  it('is handed back by a worker that is told to stop, and finished by the next', async () => {
-    const { reference } = await createReviewedCase(api, tower);
-    const { id } = await requestStudy(planner, reference);
-    const stopped = spawnWorker(api);
-    await waitForStudy(planner, id, isUnderWay);
-    expect(await endWorker(stopped, 'SIGTERM')).toBe(0);
-    expect(await readStudy(planner, id)).toMatchObject({ status: 'queued' });
-    const worker = await startTestWorker(api);
-    const study = await waitForStudy(planner, id, hasEnded);
-    await worker.stop();
-    expect(study).toMatchObject({ status: 'finished', failure: null });
   });
 });
