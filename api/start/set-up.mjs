@@ -54,7 +54,7 @@ export async function setUp(lifetime, say, settings) {
       await say.step(
         'Demo data',
         () => runCli('seed-demo'),
-        () => 'present',
+        () => 'ready',
       ),
     );
   }
