@@ -8,13 +8,14 @@ import {
   type SheetPoint,
   type SheetRing,
 } from './frame.ts';
-import { hatchLines } from './hatch.ts';
 import { drawNorth, drawScaleBar } from './north-and-scale.ts';
 import { palette } from './palette.ts';
-import { closedPath, outlinePath, segmentsPath } from './path-data.ts';
+import { closedPath, outlinePath } from './path-data.ts';
 import { drawAreaNames, drawBlockHeights, drawKeys, type NamedArea } from './plan-labels.ts';
+import { areas, drawGround, drawShadows, outline } from './plan-layers.ts';
+import { sheetPen, sheetUnit, smallPen } from './plan-pens.ts';
 import { drawStreetNames, type StreetLine } from './street-names.ts';
-import { element, group, svgDocument, type Svg } from './svg.ts';
+import { element, svgDocument, type Svg } from './svg.ts';
 import { drawTitleBlock, measureTitleBlock } from './title-block.ts';
 
 /** What a plan shows; longitude and latitude throughout. Parts that are not wanted are left empty. */
@@ -161,129 +162,6 @@ export function drawPlan(content: PlanContent, options: PlanOptions): string {
   ]);
 }
 
-interface Pen {
-  parcel: number;
-  building: number;
-  shadowLine: number;
-  hatch: number;
-  hatchSpacing: number;
-  waterSpacing: number;
-  site: number;
-  siteDashes: string;
-  proposal: number;
-  receptor: number;
-  frame: number;
-}
-
-/** A smaller sheet has finer lines and smaller words, down to what can still be read on paper. */
-function sheetUnit(frame: Frame): number {
-  return Math.min(Math.max(frame.width / 480, 0.7), 1);
-}
-
-function sheetPen(unit: number): Pen {
-  return {
-    parcel: 0.5 * unit,
-    building: 0.7 * unit,
-    shadowLine: unit,
-    hatch: 1.1 * unit,
-    hatchSpacing: 5 * unit,
-    waterSpacing: 4.5,
-    site: 1.5 * unit,
-    siteDashes: [10, 3, 2, 3].map((length) => (length * unit).toFixed(1)).join(' '),
-    proposal: 2 * unit,
-    receptor: 1.4 * unit,
-    frame: 1.2,
-  };
-}
-
-const smallPen: Pen = {
-  parcel: 0.25,
-  building: 0.3,
-  shadowLine: 0.4,
-  hatch: 0.55,
-  hatchSpacing: 2.4,
-  waterSpacing: 4,
-  site: 0.8,
-  siteDashes: '4 1.2 0.8 1.2',
-  proposal: 0.9,
-  receptor: 0.7,
-  frame: 0.8,
-};
-
-function drawGround(content: PlanContent, frame: Frame, pen: Pen): Svg {
-  const water = content.water.flatMap(({ geometry }) => frame.cutRings(geometry));
-  return group({ 'data-part': 'ground' }, [
-    areas('streets', content.streets.map(geometryOf), frame, { fill: palette.street }),
-    // Water is ruled, because colour is kept for sun and shade.
-    element('path', {
-      'data-part': 'water',
-      d: segmentsPath(hatchLines(water, pen.waterSpacing, 0)),
-      fill: 'none',
-      stroke: palette.hairline,
-      'stroke-width': pen.parcel,
-    }),
-    element('path', {
-      d: outlinePath(water, frame),
-      fill: 'none',
-      stroke: palette.buildingLine,
-      'stroke-width': pen.building,
-    }),
-    outline('open-space', content.openSpace.map(geometryOf), frame, {
-      stroke: palette.buildingLine,
-      'stroke-width': pen.building,
-      'stroke-dasharray': '1 2',
-    }),
-    outline('parcels', content.parcels, frame, {
-      stroke: palette.hairline,
-      'stroke-width': pen.parcel,
-    }),
-  ]);
-}
-
-function drawShadows(
-  shadows: { standing: Polygonal; netNew: Polygonal },
-  frame: Frame,
-  pen: Pen,
-): Svg {
-  const standing = frame.cutRings(shadows.standing);
-  const netNew = frame.cutRings(shadows.netNew);
-  return group({ 'data-part': 'shadows' }, [
-    element('path', {
-      'data-part': 'standing-shadow',
-      d: closedPath(standing),
-      'fill-rule': 'evenodd',
-      fill: palette.shadow,
-      'fill-opacity': 0.35,
-    }),
-    element('path', {
-      d: outlinePath(standing, frame),
-      fill: 'none',
-      stroke: palette.shadow,
-      'stroke-width': pen.shadowLine,
-    }),
-    element('path', {
-      'data-part': 'net-new-shadow',
-      d: closedPath(netNew),
-      'fill-rule': 'evenodd',
-      fill: palette.madder,
-      'fill-opacity': 0.1,
-    }),
-    element('path', {
-      'data-part': 'net-new-hatch',
-      d: segmentsPath(hatchLines(netNew, pen.hatchSpacing, 45)),
-      fill: 'none',
-      stroke: palette.madder,
-      'stroke-width': pen.hatch,
-    }),
-    element('path', {
-      d: outlinePath(netNew, frame),
-      fill: 'none',
-      stroke: palette.madder,
-      'stroke-width': pen.shadowLine * 0.8,
-    }),
-  ]);
-}
-
 function drawSheetText(
   content: PlanContent,
   streetsOnSheet: { name: string; lines: SheetPoint[][] }[],
@@ -343,40 +221,4 @@ function drawSheetText(
       ? []
       : [drawTitleBlock(options.titleBlock, [blockBox.x, blockBox.y], fontSize)]),
   ];
-}
-
-function areas(
-  part: string,
-  geometries: readonly Polygonal[],
-  frame: Frame,
-  look: Record<string, string | number>,
-): Svg {
-  return element('path', {
-    'data-part': part,
-    d: closedPath(geometries.flatMap((geometry) => frame.cutRings(geometry))),
-    'fill-rule': 'evenodd',
-    ...look,
-  });
-}
-
-function outline(
-  part: string,
-  geometries: readonly Polygonal[],
-  frame: Frame,
-  look: Record<string, string | number>,
-): Svg {
-  return element('path', {
-    'data-part': part,
-    d: outlinePath(
-      geometries.flatMap((geometry) => frame.cutRings(geometry)),
-      frame,
-    ),
-    fill: 'none',
-    stroke: palette.ink,
-    ...look,
-  });
-}
-
-function geometryOf(area: NamedArea): Polygonal {
-  return area.geometry;
 }

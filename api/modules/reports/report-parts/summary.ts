@@ -2,23 +2,12 @@ import type { Content } from 'pdfmake/interfaces';
 import { palette } from '../../../../shared/drawing/palette.ts';
 import { element, svgDocument } from '../../../../shared/drawing/svg.ts';
 import type { RuleClause } from '../../../../shared/rules/rule-schema.ts';
-import { sayByStreet } from './addresses.ts';
 import { sayClause } from './clause-in-words.ts';
+import { listFailing } from './failing-list.ts';
 import { findingMark } from './finding-mark.ts';
-import type { NotMetReceptor } from './not-met.ts';
 import { drawKeyedPlan, drawNorthAndScale, drawTitle } from './plan-sheets.ts';
-import { hairlineTable, label, page, rule } from './report-look.ts';
-import {
-  findWorstInstant,
-  nameReceptorClass,
-  nameReceptors,
-  type ReportScene,
-} from './report-scene.ts';
-
-/** Up to so many, for their figures. */
-const mostWithFigures = 24;
-/** Up to so many, for a list in columns; more are set street by street as running text. */
-const mostInColumns = 96;
+import { label, page, rule } from './report-look.ts';
+import { findWorstInstant, isJudged, type ReportScene } from './report-scene.ts';
 
 /**
  * The first page: which case, which study, whether the rule is met, and every receptor at which it
@@ -211,89 +200,8 @@ function clauseSummary(scene: ReportScene, clause: RuleClause): Content[] {
   ];
 }
 
-function listFailing(failing: NotMetReceptor[], clause: string, scene: ReportScene): Content {
-  const total = scene.notMet.length;
-  if (total <= mostWithFigures) return figuresTable(failing, clause, scene);
-  if (total <= mostInColumns) return inColumns(failing);
-  return runningList(failing);
-}
-
-function figuresTable(failing: NotMetReceptor[], clause: string, scene: ReportScene): Content {
-  const { figures, time } = scene;
-  return {
-    table: {
-      widths: [16, '*', 56, 36, 58, 58, 58],
-      headerRows: 1,
-      body: [
-        [
-          label('No.'),
-          label('Where'),
-          label('Kind'),
-          label('Day'),
-          rightLabel('Now'),
-          rightLabel('With it'),
-          rightLabel('Lost'),
-        ],
-        ...failing.flatMap((one) =>
-          one.rows
-            .filter((row) => row.clause === clause)
-            .map((row): Content[] => [
-              { text: String(one.number), style: 'strong', color: palette.madder },
-              { text: one.label, style: 'strong' },
-              nameReceptorClass(one.class),
-              row.day === null ? 'all' : time.shortMonthAndDay(row.day),
-              { text: figures.inUnit(row.before, row.unit), style: 'figure' },
-              { text: figures.inUnit(row.after, row.unit), style: 'figure' },
-              { text: figures.inUnit(row.lost, row.unit), style: 'figure' },
-            ]),
-        ),
-      ],
-    },
-    layout: { ...hairlineTable, paddingTop: () => 1.5, paddingBottom: () => 0.9 },
-    style: 'cell',
-    margin: [0, 0, 0, 4],
-  };
-}
-
-function rightLabel(text: string): Content {
-  return { stack: [label(text)], alignment: 'right' };
-}
-
-function inColumns(failing: NotMetReceptor[]): Content {
-  const columns = 3;
-  const perColumn = Math.ceil(failing.length / columns);
-  return {
-    columns: Array.from({ length: columns }, (_, column) => ({
-      stack: failing.slice(column * perColumn, (column + 1) * perColumn).map((one) => ({
-        text: [
-          { text: `${one.number}  `, style: 'strong', color: palette.madder },
-          `${one.label} (${nameReceptorClass(one.class)})`,
-        ],
-      })),
-    })),
-    columnGap: 12,
-    fontSize: 7.5,
-    lineHeight: 1.2,
-  };
-}
-
 /** Points: what the first page has left below its list if that has no line, what a line takes, and the smallest map that can be read. */
 const room = { withoutLines: 330, aLine: 14, aClause: 46, leastWidth: 205, mostWidth: 340 };
-
-/** The shortest form that still has every address: kind by kind, street by street. */
-function runningList(failing: NotMetReceptor[]): Content {
-  const kinds = [...new Set(failing.map((one) => one.class))];
-  return {
-    stack: kinds.map((kind) => ({
-      text: [
-        { text: `${nameReceptors(kind)}: `, style: 'strong' },
-        `${sayByStreet(failing.filter((one) => one.class === kind).map((one) => one.label))}.`,
-      ],
-    })),
-    fontSize: 7,
-    lineHeight: 1.15,
-  };
-}
 
 function worstHour(scene: ReportScene): Content[] {
   const worst = findWorstInstant(scene);
@@ -312,11 +220,13 @@ function worstHour(scene: ReportScene): Content[] {
         { svg: drawKeyedPlan(scene, worst, width), width },
         {
           stack: [
-            label('The judged hour with the most net new shadow'),
+            label(
+              `${isJudged(scene.payload, worst.at) ? 'The judged hour' : 'The hour'} with the most net new shadow`,
+            ),
             { svg: drawTitle(scene, worst), margin: [0, 4, 0, 6] },
             { svg: drawNorthAndScale(scene, width), margin: [0, 0, 0, 6] },
             {
-              text: `${figures.area(worst.netNewM2)} of ground in shadow that has sun now: hatched. Plain: shadow that is there already. The numbers are those of the list above. Every hour of every key date follows on its own sheet.`,
+              text: `${figures.area(worst.netNewM2)} of ground in shadow that has sun now: hatched. Plain: shadow that is there already.${scene.notMet.length === 0 ? '' : ' The numbers are those of the list above.'} Every hour of every key date follows further on.`,
             },
           ],
           style: 'small',
