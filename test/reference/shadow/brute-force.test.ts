@@ -1,11 +1,11 @@
 import { difference, intersection, union, type Geom } from 'polyclip-ts';
 import { describe, expect, it } from 'vitest';
+import { loadClipper } from '../../../api/clipper.ts';
 import { signedRingArea, type Ring } from '../../../shared/geometry/ring.ts';
 import { createLightMeasures, makeLitArea } from '../../../shared/shadow/receptor-light.ts';
 import { shadowVector } from '../../../shared/shadow/shadow-contours.ts';
 import { castShadowLayer, type SceneBlock } from '../../../shared/shadow/shadow-layer.ts';
 import { drawShadowPolygons, overlapAreaM2 } from '../../../shared/shadow/shadow-polygons.ts';
-import { loadClipper } from '../../../api/clipper.ts';
 import { makeRandomTown, makeRectangle } from '../../support/plane-scenes.ts';
 import { createSeededRandom } from '../../support/seeded-random.ts';
 
