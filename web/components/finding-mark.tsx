@@ -27,7 +27,10 @@ export function FindingMark({ finding, close = false }: FindingMarkProps) {
   return (
     <span className={finding === 'not-met' ? 'font-strong text-madder' : ''}>
       <span className="whitespace-nowrap">
-        <span aria-hidden="true">{signs[finding]} </span>
+        <span aria-hidden="true">
+          {signs[finding]}
+          {'\u00a0'}
+        </span>
         {words[finding]}
       </span>
       {close ? <span className="font-normal text-ink-soft"> (close)</span> : null}

@@ -4,7 +4,6 @@ import { caseStateWords, publicCaseStates } from '../../../shared/contracts/case
 import type { CaseDetail } from '../../../shared/contracts/cases.ts';
 import type { MassingSite } from '../../../shared/massing/massing-scene.ts';
 import { Button } from '../../components/button.tsx';
-import { Caution } from '../../components/caution.tsx';
 import { EmptyState } from '../../components/empty-state.tsx';
 import { PageHeading } from '../../components/page-heading.tsx';
 import { QueryView } from '../../components/query-view.tsx';
@@ -73,8 +72,6 @@ function Application({ reviewCase }: { reviewCase: CaseDetail }) {
       {reviewCase.correction === null ? null : (
         <CorrectionNotice correction={reviewCase.correction} />
       )}
-      <SiteSection reviewCase={reviewCase} />
-      <MassingSection reviewCase={reviewCase} />
       <section className="grid gap-3" aria-labelledby="next-heading">
         <h2 id="next-heading">What comes next</h2>
         {reviewCase.transitions.length === 0 ? (
@@ -93,11 +90,12 @@ function Application({ reviewCase }: { reviewCase: CaseDetail }) {
           />
         )}
       </section>
+      <SiteSection reviewCase={reviewCase} />
+      <MassingSection reviewCase={reviewCase} />
       <section className="grid gap-3" aria-labelledby="history-heading">
         <h2 id="history-heading">What has happened</h2>
         <CaseHistory history={reviewCase.history} />
       </section>
-      <Caution methodHref={paths.method.href()} />
     </>
   );
 }
@@ -226,20 +224,24 @@ function Revisions({ reviewCase, revisions }: RevisionsProps) {
           <RevisionComparison reference={reference} revisions={revisions} />
         </div>
       )}
-      <div className="grid gap-2">
-        <h3>Revision {shown}</h3>
-        <QueryView query={massing} what="the revision">
-          {(detail) => (
-            <MassingReview
-              key={detail.revision}
-              blocks={drawnBlocksOf(detail.blocks)}
-              issues={detail.issues}
-              figures={detail.figures}
-              site={site}
-            />
-          )}
-        </QueryView>
-      </div>
+      <details open={!reviewCase.abilities.includes('upload-massing')}>
+        <summary className="min-h-6 cursor-pointer font-strong">
+          How revision {shown} was read
+        </summary>
+        <div className="mt-4">
+          <QueryView query={massing} what="the revision">
+            {(detail) => (
+              <MassingReview
+                key={detail.revision}
+                blocks={drawnBlocksOf(detail.blocks)}
+                issues={detail.issues}
+                figures={detail.figures}
+                site={site}
+              />
+            )}
+          </QueryView>
+        </div>
+      </details>
     </div>
   );
 }

@@ -1,7 +1,7 @@
+import { useMemo } from 'react';
 import { useParams } from 'react-router-dom';
 import { commentableCaseStates } from '../../../shared/contracts/case-life.ts';
 import type { CaseDetail } from '../../../shared/contracts/cases.ts';
-import { Caution } from '../../components/caution.tsx';
 import { PageHeading } from '../../components/page-heading.tsx';
 import { QueryView } from '../../components/query-view.tsx';
 import { TitleStrip } from '../../components/title-strip.tsx';
@@ -10,8 +10,9 @@ import { describeStage } from '../../features/cases/case-stage.ts';
 import { CaseFinding } from '../../features/cases/components/case-finding.tsx';
 import { CaseHistory } from '../../features/cases/components/case-history.tsx';
 import { describeProposal } from '../../features/cases/proposal-in-words.ts';
+import { useComments } from '../../features/comments/api/list-comments.ts';
 import { useFormats } from '../../lib/place-context.ts';
-import { paths } from '../paths.ts';
+import type { MapPin } from '../../map/map-features.ts';
 import { CaseChangesSection } from './case-changes-section.tsx';
 import { CaseCommentsSection } from './case-comments-section.tsx';
 import { CaseDocumentsSection } from './case-documents-section.tsx';
@@ -34,6 +35,14 @@ function PublicCase({ reviewCase }: { reviewCase: CaseDetail }) {
   const formats = useFormats();
   const place = useChosenPlace();
   const stage = describeStage(reviewCase.state);
+  const comments = useComments(reviewCase.reference, { state: 'published', pageSize: 200 });
+  const pins = useMemo(
+    () =>
+      (comments.data?.rows ?? []).flatMap(({ id, pin, authorName }): MapPin[] =>
+        pin === null ? [] : [{ id, lngLat: pin, label: authorName }],
+      ),
+    [comments.data],
+  );
   const isCommentable = commentableCaseStates.includes(reviewCase.state);
   return (
     <div className="grid gap-10">
@@ -80,14 +89,22 @@ function PublicCase({ reviewCase }: { reviewCase: CaseDetail }) {
           </ul>
         </nav>
       </div>
-      <CaseChangesSection reviewCase={reviewCase} place={place} />
-      <CaseDocumentsSection reviewCase={reviewCase} />
-      <CaseCommentsSection reviewCase={reviewCase} place={place} isCommentable={isCommentable} />
-      <section className="grid gap-3" aria-labelledby="history-heading">
-        <h2 id="history-heading">What has happened</h2>
-        <CaseHistory history={reviewCase.history} />
-      </section>
-      <Caution methodHref={paths.method.href()} />
+      <CaseChangesSection reviewCase={reviewCase} place={place} pins={pins} />
+      <div className="grid gap-x-10 gap-y-10 lg:grid-cols-[minmax(0,7fr)_minmax(0,5fr)]">
+        <CaseCommentsSection
+          reviewCase={reviewCase}
+          comments={comments}
+          place={place}
+          isCommentable={isCommentable}
+        />
+        <div className="grid content-start gap-10">
+          <CaseDocumentsSection reviewCase={reviewCase} />
+          <section className="grid gap-3" aria-labelledby="history-heading">
+            <h2 id="history-heading">What has happened</h2>
+            <CaseHistory history={reviewCase.history} />
+          </section>
+        </div>
+      </div>
     </div>
   );
 }

@@ -13,7 +13,7 @@ export function CaseHistory({ history }: { history: CaseDetail['history'] }) {
         .map((entry) => (
           <li
             key={`${entry.at} ${entry.to}`}
-            className="grid gap-x-6 border-b border-hairline py-1.5 sm:grid-cols-[14rem_1fr]"
+            className="grid gap-x-6 border-b border-hairline py-1.5 sm:grid-cols-[17rem_1fr]"
           >
             <span className="text-ink-soft">{formats.instant(entry.at)}</span>
             <span>

@@ -23,11 +23,17 @@ export function MassingReview({ blocks, issues, figures, site }: MassingReviewPr
       {figures === null ? null : <FiguresStrip figures={figures} />}
       {blocks.length === 0 ? null : (
         <>
-          <MassingDrawings blocks={blocks} site={site} />
-          <BlockTable blocks={blocks} />
-          <section className="grid gap-3" aria-label="Shadow preview">
+          <div className="grid items-start gap-x-8 gap-y-6 xl:grid-cols-[minmax(0,2fr)_minmax(0,1fr)]">
+            <MassingDrawings blocks={blocks} site={site} />
+            <BlockTable blocks={blocks} />
+          </div>
+          <section className="grid max-w-5xl gap-3" aria-label="Shadow preview">
             <h3>Where its shadow falls</h3>
-            <ShadowPreview blocks={blocks} site={site} />
+            {issues.some(({ severity }) => severity === 'error') ? (
+              <p>The preview is drawn once nothing is left to correct.</p>
+            ) : (
+              <ShadowPreview blocks={blocks} site={site} />
+            )}
           </section>
         </>
       )}

@@ -37,12 +37,12 @@ export function ShadowPreviewPlan({ blocks, site, sun, extent, label }: ShadowPr
   const coming = contoursPath(shadowContours(blocks, 'proposed', sun), frame.toSheet);
 
   return (
-    <div className="relative border border-hairline bg-sheet">
+    <div className="border border-hairline bg-sheet">
       <svg
         viewBox={`0 0 ${frame.width} ${frame.height.toFixed(1)}`}
         role="img"
         aria-label={label}
-        className="block h-auto w-full"
+        className="block h-auto max-h-[36rem] w-full"
       >
         <defs>
           <pattern
@@ -84,10 +84,10 @@ export function ShadowPreviewPlan({ blocks, site, sun, extent, label }: ShadowPr
           stroke="var(--color-ink)"
           strokeWidth="2"
         />
+        <g transform={`translate(10 ${(frame.height - 72).toFixed(1)})`}>
+          <NorthAndScale metresToPixel={1 / frame.pxPerM} />
+        </g>
       </svg>
-      <div className="absolute start-2 bottom-2 hidden sm:block">
-        <NorthAndScale metresToPixel={1 / frame.pxPerM} />
-      </div>
     </div>
   );
 }

@@ -15,7 +15,7 @@ export interface LedgerPictureProps {
 const enlargement = 1.45;
 const widestPx = 720;
 /** Where there is room, hours stand beside the bands. */
-const figuresFromPx = 560;
+const figuresFromPx = 680;
 
 /** The sun ledger as a picture: for each key date the sun now over the sun with the proposal. */
 export function LedgerPicture({ ledger, judged }: LedgerPictureProps) {

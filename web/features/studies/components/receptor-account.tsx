@@ -5,7 +5,7 @@ import { ProblemNotice } from '../../../components/problem-notice.tsx';
 import { isApiError } from '../../../lib/api-error.ts';
 import { useFormats } from '../../../lib/place-context.ts';
 import { useReceptor } from '../api/get-receptor.ts';
-import { describeLedgerDay } from '../sun-sentence.ts';
+import { describeLedgerDay, subjectOfClass } from '../sun-sentence.ts';
 import { FindingLines } from './finding-lines.tsx';
 import { LedgerPicture } from './ledger-picture.tsx';
 import { LedgerTable } from './ledger-table.tsx';
@@ -48,26 +48,28 @@ export function ReceptorAccount({
   if (detail.data === undefined) return <Loading what="the sun ledger" />;
 
   const { ledger, findings } = detail.data;
-  const [first, ...rest] = orderByLoss(ledger.days);
+  const days = orderByLoss(ledger.days);
+  const isUntouched = days.every((day) => !losesSun(day));
+  const [first, ...rest] = days;
   return (
     <section className="grid gap-4" aria-labelledby="account-heading">
       <h2 id="account-heading" ref={heading} tabIndex={-1}>
         What changes at {ledger.label}
       </h2>
-      {first === undefined ? null : (
-        <div className="say grid gap-2 text-lead">
-          <p>
-            <Sentence parts={describeLedgerDay(first, ledger.class, formats)} />
-          </p>
-        </div>
-      )}
+      <p className="say text-lead">
+        {isUntouched || first === undefined ? (
+          `On none of the four key dates does the proposal take sun from ${subjectOfClass(ledger.class)}.`
+        ) : (
+          <Sentence parts={describeLedgerDay(first, ledger.class, formats)} />
+        )}
+      </p>
       <div className="grid gap-1">
         <h3>What the rule says</h3>
         <FindingLines findings={findings} />
       </div>
       <LedgerPicture ledger={ledger} judged={judged} />
       <div className="measure grid gap-2">
-        {rest.map((day) => (
+        {(isUntouched ? days : rest).map((day) => (
           <p key={day.date}>
             <Sentence parts={describeLedgerDay(day, ledger.class, formats)} />
           </p>
@@ -81,6 +83,11 @@ export function ReceptorAccount({
       </details>
     </section>
   );
+}
+
+/** To the minute, as the sentences have it. */
+function losesSun({ sunHours, lostSpans }: LedgerDay): boolean {
+  return Math.round(sunHours.lost * 60) > 0 || lostSpans.length > 0;
 }
 
 /** The day that loses most comes first, the others in the order of the year. */

@@ -1,23 +1,15 @@
 import { useMemo } from 'react';
 import type { FindingRow, StudyDetail } from '../../../../shared/contracts/studies.ts';
 import type { Polygonal } from '../../../../shared/geometry/geojson-schema.ts';
-import { sunPositionAt } from '../../../../shared/solar/sun-position.ts';
-import { ChoiceRow } from '../../../components/choice-row.tsx';
 import { Loading } from '../../../components/loading.tsx';
 import { ProblemNotice } from '../../../components/problem-notice.tsx';
-import { useFormats, usePlace } from '../../../lib/place-context.ts';
-import type { ShadowLayer } from '../../../map/case-layers.ts';
-import { SunArc } from '../../../map/sun-arc.tsx';
 import { useStudyView } from '../../../map/use-study-view.ts';
 import { useReceptor } from '../api/get-receptor.ts';
-import { useShadows } from '../api/get-shadows.ts';
 import type { DrawnEvidence } from '../api/get-study-evidence.ts';
-import { ledgerDayOf, samplesOf } from '../ledger-day.ts';
 import { listSunLosers } from '../sun-losers.ts';
-import { DateChoice } from './date-choice.tsx';
 import { ReceptorDay } from './receptor-day.tsx';
 import { StudyDownloads } from './study-downloads.tsx';
-import { StudyMap } from './study-map.tsx';
+import { StudySheet } from './study-sheet.tsx';
 import { SunLosersTable } from './sun-losers-table.tsx';
 
 export interface StudyExplorerProps {
@@ -29,81 +21,28 @@ export interface StudyExplorerProps {
   rows: readonly FindingRow[];
 }
 
-const layers = [
-  { id: 'before', label: 'Before' },
-  { id: 'after', label: 'After' },
-  { id: 'net-new', label: 'Net new difference' },
-] as const satisfies readonly { id: ShadowLayer; label: string }[];
-
 const tableId = 'who-loses-sun';
 
 /** A finished study to look at hour by hour: the map over the sun arc, and who loses sun beside it. */
 export function StudyExplorer({ study, site, evidence, rows }: StudyExplorerProps) {
-  const formats = useFormats();
-  const { municipality } = usePlace();
   const view = useStudyView(study);
-  const { date, day, steps, atMs, askedAt, layer, change } = view;
-  const shadows = useShadows(study.id, askedAt);
+  const { date, day, change } = view;
   const losers = useMemo(() => listSunLosers(evidence, rows, date), [evidence, rows, date]);
   const chosen = view.receptor ?? losers[0]?.receptor ?? null;
   const receptor = useReceptor(study.id, chosen);
-  const ledgerDay = ledgerDayOf(receptor.data?.ledger, date);
-  const samples = useMemo(() => (ledgerDay === null ? null : samplesOf(ledgerDay)), [ledgerDay]);
-  const sun = sunPositionAt(atMs, municipality.longitude, municipality.latitude);
-  const isDrawn = shadows.data !== undefined && Date.parse(shadows.data.at) === atMs;
 
   return (
     <div className="grid gap-x-8 gap-y-6 lg:grid-cols-[minmax(0,8fr)_minmax(0,5fr)]">
-      <section aria-label="Map and time of day" className="grid content-start gap-3">
-        <StudyMap
-          study={study}
-          site={site}
-          evidence={evidence}
-          rows={rows}
-          shadows={steps === null ? null : (shadows.data ?? null)}
-          layer={layer}
-          chosen={chosen}
-          onChoose={(next) => change({ receptor: next })}
-          tableId={tableId}
-        />
-        <div className="flex flex-wrap items-baseline justify-between gap-x-6 gap-y-1">
-          <DateChoice
-            keyDates={study.keyDates}
-            value={date}
-            onChange={(next) => change({ date: next })}
-          />
-          <ChoiceRow
-            label="What the map shows"
-            options={layers}
-            value={layer}
-            onChange={(next) => change({ layer: next })}
-          />
-        </div>
-        {steps === null ? (
-          <p>The sun does not rise on {formats.date(date)}.</p>
-        ) : (
-          <SunArc
-            day={day}
-            steps={steps}
-            atMs={atMs}
-            altitudeDeg={sun.altitudeDeg}
-            onChange={view.setInstant}
-            windows={view.windows}
-            samples={samples}
-          />
-        )}
-        <p role="status" className="min-h-5 text-small text-ink-soft">
-          {shadows.isError
-            ? ''
-            : isDrawn
-              ? describeNetNew(study, shadows.data.at, formats)
-              : 'Drawing …'}
-        </p>
-        {shadows.isError ? (
-          <ProblemNotice error={shadows.error} onRetry={() => void shadows.refetch()} />
-        ) : null}
-        <MapKey />
-      </section>
+      <StudySheet
+        study={study}
+        site={site}
+        evidence={evidence}
+        rows={rows}
+        view={view}
+        chosen={chosen}
+        onChoose={(next) => change({ receptor: next })}
+        tableId={tableId}
+      />
       <section id={tableId} aria-label="Who loses sun" className="grid content-start gap-5">
         <SunLosersTable
           key={date}
@@ -120,45 +59,5 @@ export function StudyExplorer({ study, site, evidence, rows }: StudyExplorerProp
         <StudyDownloads studyId={study.id} />
       </section>
     </div>
-  );
-}
-
-function describeNetNew(
-  study: StudyDetail,
-  at: string,
-  formats: ReturnType<typeof useFormats>,
-): string {
-  const instant = study.instants.find((one) => Date.parse(one.at) === Date.parse(at));
-  if (instant === undefined || instant.netNewM2 === null) return '';
-  return `At ${formats.clockWithZone(at)} the proposal shades ${formats.area(instant.netNewM2)} of ground anew.`;
-}
-
-/** What the map's signs mean. */
-function MapKey() {
-  return (
-    <ul className="flex flex-wrap gap-x-5 gap-y-1 text-small" aria-label="Key of the map">
-      <li className="flex items-center gap-1.5">
-        <span aria-hidden="true" className="inline-block h-3 w-4 border border-slate bg-slate/35" />
-        shadow
-      </li>
-      <li className="flex items-center gap-1.5">
-        <span aria-hidden="true" className="hatched inline-block h-3 w-4 border border-madder" />
-        net new shadow
-      </li>
-      <li className="flex items-center gap-1.5">
-        <span aria-hidden="true" className="inline-block h-3 w-4 border-2 border-ink bg-sheet" />
-        proposal
-      </li>
-      <li className="flex items-center gap-1.5">
-        <span aria-hidden="true" className="font-strong text-madder">
-          ✕
-        </span>
-        rule not met
-      </li>
-      <li className="flex items-center gap-1.5">
-        <span aria-hidden="true" className="inline-block h-3 w-4 border-2 border-marigold" />
-        chosen receptor
-      </li>
-    </ul>
   );
 }

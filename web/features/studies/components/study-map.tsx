@@ -6,13 +6,13 @@ import type {
 } from '../../../../shared/contracts/studies.ts';
 import { drawPlan, emptyPlan } from '../../../../shared/drawing/plan-drawing.ts';
 import { titleBlockRows, type TitleBlock } from '../../../../shared/drawing/title-block.ts';
-import type { Polygonal } from '../../../../shared/geometry/geojson-schema.ts';
+import type { LngLat, Polygonal } from '../../../../shared/geometry/geojson-schema.ts';
 import { SvgDrawing } from '../../../components/svg-drawing.tsx';
 import { usePlace } from '../../../lib/place-context.ts';
 import { useCameraInUrl } from '../../../map/camera-in-url.ts';
 import type { ShadowLayer } from '../../../map/case-layers.ts';
 import { CaseMap } from '../../../map/case-map.tsx';
-import { boundsAround, type Bounds } from '../../../map/map-features.ts';
+import { boundsAround, type Bounds, type MapPin } from '../../../map/map-features.ts';
 import { MapTitleBlock } from '../../../map/map-title-block.tsx';
 import type { DrawnEvidence } from '../api/get-study-evidence.ts';
 import { mapBlocksOf, mapReceptorsOf } from '../map-contents.ts';
@@ -25,7 +25,9 @@ export interface StudyMapProps {
   shadows: InstantShadows | null;
   layer: ShadowLayer;
   chosen: string | null;
-  onChoose: (receptor: string) => void;
+  /** A receptor and the place at which the person pointed. */
+  onChoose: (receptor: string, lngLat: LngLat) => void;
+  pins?: readonly MapPin[];
   /** Where the same stands as a table. */
   tableId: string;
 }
@@ -35,7 +37,7 @@ const fallbackWidth = 760;
 
 /** The study on the map: the site, the shadows of the instant, who is judged and who is chosen. */
 export function StudyMap(props: StudyMapProps) {
-  const { study, site, evidence, rows, shadows, layer, chosen, onChoose, tableId } = props;
+  const { study, site, evidence, rows, shadows, layer, chosen, onChoose, pins, tableId } = props;
   const { municipality } = usePlace();
   const { camera, onCameraChange } = useCameraInUrl();
   const blocks = useMemo(() => mapBlocksOf(evidence), [evidence]);
@@ -63,10 +65,11 @@ export function StudyMap(props: StudyMapProps) {
       blocks={blocks}
       shadows={shadows}
       layer={layer}
+      {...(pins === undefined ? {} : { pins })}
       receptors={receptors}
       chosenReceptor={chosen}
-      onPick={({ receptor }) => {
-        if (receptor !== null) onChoose(receptor);
+      onPick={({ receptor, lngLat }) => {
+        if (receptor !== null) onChoose(receptor, lngLat);
       }}
       titleBlock={<MapTitleBlock block={titleBlock} />}
       fallback={<StudyPlan {...props} bounds={bounds} titleBlock={titleBlock} />}
