@@ -41,6 +41,7 @@ export function ApplicationsPage() {
               hideCaption
               columns={applicationColumns(formats)}
               rows={page.rows}
+              stacksWhenNarrow
               rowKey={(row) => row.reference}
             />
           )

@@ -1,3 +1,4 @@
+import { Link } from 'react-router-dom';
 import type { CaseState } from '../../../shared/contracts/case-life.ts';
 import type { CaseSummary } from '../../../shared/contracts/cases.ts';
 import { EmptyState } from '../../components/empty-state.tsx';
@@ -66,7 +67,16 @@ function HearingSection({ title, cases, empty }: HearingSectionProps) {
         <CaseList
           cases={cases}
           hrefOf={({ reference }) => paths.publicCase.href(reference)}
-          below={({ reference }) => <CaseReports reference={reference} />}
+          below={({ reference }) => (
+            <>
+              <p>
+                <Link to={paths.deskCase.href(reference, 'findings')} className="link">
+                  Findings, study and comments of the case
+                </Link>
+              </p>
+              <CaseReports reference={reference} />
+            </>
+          )}
         />
       )}
     </section>

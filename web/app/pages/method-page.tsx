@@ -1,5 +1,7 @@
+import { Link } from 'react-router-dom';
 import { PageHeading } from '../../components/page-heading.tsx';
 import { usePlace } from '../../lib/place-context.ts';
+import { paths } from '../paths.ts';
 import { MethodSection } from './method-section.tsx';
 
 /** How sun and shadows are computed, what is left out, and where the methods come from. */
@@ -17,7 +19,7 @@ export function MethodPage() {
 
       <MethodSection title="Where the sun stands">
         <p>
-          The sun’s place in the sky is computed for {municipality.name} (
+          The sun’s place in the sky is computed for {municipality.shortName} (
           {formats.number(Math.abs(municipality.latitude), 2)}°{' '}
           {municipality.latitude >= 0 ? 'north' : 'south'},{' '}
           {formats.number(Math.abs(municipality.longitude), 2)}°{' '}
@@ -72,6 +74,11 @@ export function MethodPage() {
           The municipality’s rule says which places are judged, on which days, in which hours, and
           what they must keep. A study keeps the version of the rule by which it was judged. Every
           place that does not meet it is listed by address on the first page of the staff report.
+        </p>
+        <p>
+          <Link to={paths.adminRules.href()} className="link">
+            The rule and its versions in plain words
+          </Link>
         </p>
         <p>
           The loss index, from 0 to 100, is the share of clear-sky solar energy lost at the places

@@ -34,7 +34,7 @@ export function describeClause(
   clause: RuleClause,
   formats: UnitFormats,
 ): { label: string; value: string }[] {
-  const { receptors, disregard } = clause;
+  const { receptors } = clause;
   const classes = joinWords(
     receptors.classes.map((one) => classWords[one]),
     'and',
@@ -58,11 +58,18 @@ export function describeClause(
     },
     { label: 'Measured', value: describeMeasure(clause.measure, formats) },
     { label: 'Asked', value: describeLimit(clause.limit, clause.measure, formats) },
-    {
-      label: 'Not counted',
-      value: `new shadow on more than ${formats.area(disregard.area)} for at most ${disregard.minutes} minutes a day`,
-    },
+    { label: 'Not counted', value: describeDisregard(clause.disregard, formats) },
   ];
+}
+
+function describeDisregard(
+  { area, minutes }: RuleClause['disregard'],
+  formats: UnitFormats,
+): string {
+  const covers = `covers more than ${formats.area(area)}`;
+  return minutes === 0
+    ? `a place on which the new shadow never ${covers}`
+    : `a place on which the new shadow ${covers} for at most ${formats.number(minutes)} minutes a day`;
 }
 
 function describeDay(day: RuleDay): string {

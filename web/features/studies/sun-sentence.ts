@@ -64,7 +64,11 @@ export function describeLedgerDay(
       ...has,
       plain(', and '),
       strong(formats.hours(day.sunHours.after)),
-      plain(' with the proposal: more than before.'),
+      plain(
+        day.lostSpans.length === 0
+          ? ' with the proposal: more than before.'
+          : ` with the proposal: more than before, though some is lost ${lostBetween(day.lostSpans, formats)}.`,
+      ),
     ];
   }
   return [
@@ -75,7 +79,7 @@ export function describeLedgerDay(
     plain(
       day.lostSpans.length === 0
         ? 'at no moment does as much as a twentieth of it lose the sun.'
-        : `it is lost ${lostBetween(day.lostSpans, formats)}.`,
+        : endSentence(`it is lost ${lostBetween(day.lostSpans, formats)}`),
     ),
   ];
 }
@@ -92,4 +96,9 @@ export function lostBetween(
 
 function minutesOf(hours: number): number {
   return Math.round(hours * 60);
+}
+
+/** A full stop, unless the last word brings its own: `1:23 p.m.` */
+function endSentence(text: string): string {
+  return text.endsWith('.') ? text : `${text}.`;
 }

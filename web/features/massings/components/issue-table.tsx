@@ -30,6 +30,7 @@ export function IssueTable({ issues }: IssueTableProps) {
       caption={describeCount(issues)}
       columns={columns}
       rows={rows}
+      stacksWhenNarrow
       rowKey={({ key }) => key}
     />
   );

@@ -21,6 +21,7 @@ export function RevisionTable({ reference, revisions, shown, onShow }: RevisionT
       hideCaption
       columns={revisionColumns(reference, formats, onShow)}
       rows={revisions}
+      stacksWhenNarrow
       rowKey={(row) => String(row.revision)}
       isRowSelected={(row) => row.revision === shown}
     />

@@ -11,7 +11,10 @@ export function ReportList({ reports }: ReportListProps) {
   return (
     <ul className="border-t border-hairline">
       {reports.map((report) => (
-        <li key={report.number} className="grid gap-0.5 border-b border-hairline py-3">
+        <li
+          key={report.number}
+          className="grid gap-0.5 border-b border-hairline py-3 last:border-b-0"
+        >
           <p>
             <a href={`/api/reports/${report.number}.pdf`} className="link font-strong">
               Staff report {report.number}
