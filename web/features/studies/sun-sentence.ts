@@ -67,7 +67,9 @@ export function describeLedgerDay(
       plain(
         day.lostSpans.length === 0
           ? ' with the proposal: more than before.'
-          : ` with the proposal: more than before, though some is lost ${lostBetween(day.lostSpans, formats)}.`,
+          : endSentence(
+              ` with the proposal: more than before, though some is lost ${lostBetween(day.lostSpans, formats)}`,
+            ),
       ),
     ];
   }
