@@ -23,7 +23,7 @@ maplibregl.setWorkerUrl(workerUrl);
 
 /** The name of a move that the person asked for by a button of ours, as map events carry it. */
 const byPerson = { isByPerson: true };
-const fitOptions = { padding: 24, animate: false } as const;
+const fitOptions = { padding: 8, animate: false } as const;
 
 type MapCanvasProps = CaseMapProps & { onTilesMissing: () => void };
 
@@ -86,6 +86,8 @@ export default function MapCanvas(props: MapCanvasProps) {
           created.addImage(name, image, { pixelRatio: imagePixelRatio });
         }
       }
+      // The sheet may have got its size only after the map was made.
+      created.resize();
       setMap(created);
     });
     return () => {
@@ -137,7 +139,7 @@ export default function MapCanvas(props: MapCanvasProps) {
         onPick(pickAt(map, map.project(map.getCenter())));
       }}
     >
-      <div ref={container} className="absolute inset-0" />
+      <div ref={container} className="size-full" />
       {hasFocus && isPickable ? (
         <div
           className="pointer-events-none absolute inset-0 grid place-items-center"
@@ -172,7 +174,7 @@ export default function MapCanvas(props: MapCanvasProps) {
         </MapButton>
       </div>
       {metresToPixel === null ? null : (
-        <div className="pointer-events-none absolute start-2 bottom-2">
+        <div className="pointer-events-none absolute start-0 bottom-0 bg-sheet/80 p-2 pe-0">
           <NorthAndScale metresToPixel={metresToPixel} />
         </div>
       )}

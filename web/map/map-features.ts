@@ -41,36 +41,36 @@ export function blockFeatures(blocks: readonly MapBlock[]) {
   return collect(
     blocks
       .toSorted((a, b) => a.topM - b.topM)
-      .map(({ id, role, geometry, topM }): Feature<Polygonal> => ({
-        type: 'Feature',
+      .map(({ id, role, geometry, topM }) => ({
+        type: 'Feature' as const,
         properties: { id, role, topM },
         geometry,
       })),
   );
 }
 
-/** The height of each proposed block, set into one of its corners; neighbours take different corners. */
+/**
+ * The height of each proposed block, in its middle; where a higher block stands on that, towards
+ * the corner farthest from the higher one.
+ */
 export function blockLabelFeatures(
   blocks: readonly MapBlock[],
   writeHeight: (topM: number) => string,
 ) {
-  const corners = [
-    { east: -1, north: 1, anchor: 'top-left' },
-    { east: 1, north: 1, anchor: 'top-right' },
-    { east: 1, north: -1, anchor: 'bottom-right' },
-    { east: -1, north: -1, anchor: 'bottom-left' },
-  ] as const;
+  const proposed = blocks
+    .filter((block) => block.role === 'proposed')
+    .map((block) => ({ ...block, middle: middleOf(block.geometry) }));
   return collect(
-    blocks
-      .filter((block) => block.role === 'proposed')
-      .toSorted((a, b) => a.topM - b.topM)
-      .map((block, index) => {
-        const corner = corners[index % corners.length] ?? corners[0];
-        return pointFeature(farthestVertex(block.geometry, corner.east, corner.north), {
-          text: writeHeight(block.topM),
-          anchor: corner.anchor,
-        });
-      }),
+    proposed.map((block) => {
+      const above = proposed
+        .filter((other) => other.topM > block.topM && isInside(block.middle, other.geometry))
+        .toSorted((a, b) => b.topM - a.topM)[0];
+      const place =
+        above === undefined
+          ? block.middle
+          : between(farthestVertex(block.geometry, above.middle), block.middle, 0.3);
+      return pointFeature(place, { text: writeHeight(block.topM) });
+    }),
   );
 }
 
@@ -163,13 +163,35 @@ function ringCentroid(ring: readonly LngLat[]): { lngLat: LngLat; size: number }
   };
 }
 
-/** The vertex that lies farthest towards a corner, for example north-west. */
-function farthestVertex(geometry: Polygonal, east: number, north: number): LngLat {
-  const lngScale = Math.cos((middleOf(geometry)[1] * Math.PI) / 180);
-  const reach = ([lng, lat]: LngLat) => lng * lngScale * east + lat * north;
-  const vertices: LngLat[] =
-    geometry.type === 'Polygon' ? geometry.coordinates.flat() : geometry.coordinates.flat(2);
-  return vertices.reduce((best, one) => (reach(one) > reach(best) ? one : best));
+/** Whether a place lies in a polygon, by the even-odd rule over all its rings. */
+function isInside([lng, lat]: LngLat, geometry: Polygonal): boolean {
+  let isOdd = false;
+  for (const ring of ringsOf(geometry)) {
+    ring.forEach(([lngA, latA], index) => {
+      const [lngB, latB] = ring[index + 1] ?? ring[0] ?? [lngA, latA];
+      const isCrossing =
+        latA > lat !== latB > lat && lng < lngA + ((lat - latA) / (latB - latA)) * (lngB - lngA);
+      if (isCrossing) isOdd = !isOdd;
+    });
+  }
+  return isOdd;
+}
+
+function farthestVertex(geometry: Polygonal, from: LngLat): LngLat {
+  const lngScale = Math.cos((from[1] * Math.PI) / 180);
+  const distance = ([lng, lat]: LngLat) => Math.hypot((lng - from[0]) * lngScale, lat - from[1]);
+  return ringsOf(geometry)
+    .flat()
+    .reduce((best, one) => (distance(one) > distance(best) ? one : best), from);
+}
+
+/** The place a share of the way from one to another. */
+function between(a: LngLat, b: LngLat, share: number): LngLat {
+  return [a[0] + (b[0] - a[0]) * share, a[1] + (b[1] - a[1]) * share];
+}
+
+function ringsOf(geometry: Polygonal): LngLat[][] {
+  return geometry.type === 'Polygon' ? geometry.coordinates : geometry.coordinates.flat();
 }
 
 function listPositions(geometry: Geometry): Position[] {

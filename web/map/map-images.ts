@@ -7,8 +7,8 @@ export const imagePixelRatio = 2;
 /** The images that the layers name, drawn on a canvas; no file is fetched. */
 export function drawMapImages(): Map<string, ImageData> {
   return new Map([
-    [mapImages.hatch, draw(8, 8, drawHatch)],
-    [mapImages.cross, draw(18, 18, drawCross)],
+    [mapImages.hatch, draw(6, 6, drawHatch)],
+    [mapImages.cross, draw(14, 14, drawCross)],
     [mapImages.pin, draw(20, 26, drawPin)],
   ]);
 }
@@ -28,12 +28,15 @@ function draw(
   return context.getImageData(0, 0, canvas.width, canvas.height);
 }
 
-/** A diagonal that meets itself at every edge, so that the tiles join without a seam. */
+/**
+ * A diagonal that meets itself at every edge, so that the tiles join without a seam. Its ground
+ * hides the plain shadow below, so that what is new does not look like what is there already.
+ */
 function drawHatch(context: CanvasRenderingContext2D, width: number, height: number): void {
-  context.fillStyle = `${colour.madder}24`;
+  context.fillStyle = colour.netNewGround;
   context.fillRect(0, 0, width, height);
   context.strokeStyle = colour.madder;
-  context.lineWidth = 1.5;
+  context.lineWidth = 1.1;
   context.beginPath();
   for (const shift of [-width, 0, width]) {
     context.moveTo(shift - 2, height + 2);
@@ -42,23 +45,24 @@ function drawHatch(context: CanvasRenderingContext2D, width: number, height: num
   context.stroke();
 }
 
-/** The cross of "not met" on a disc of paper. */
+/** The cross of "not met", with an edge of paper. */
 function drawCross(context: CanvasRenderingContext2D, width: number): void {
   const middle = width / 2;
-  context.fillStyle = colour.sheet;
-  context.strokeStyle = colour.madder;
-  context.lineWidth = 1;
-  context.beginPath();
-  context.arc(middle, middle, middle - 1, 0, 2 * Math.PI);
-  context.fill();
-  context.stroke();
-  context.lineWidth = 2.2;
-  context.beginPath();
-  context.moveTo(middle - 4, middle - 4);
-  context.lineTo(middle + 4, middle + 4);
-  context.moveTo(middle + 4, middle - 4);
-  context.lineTo(middle - 4, middle + 4);
-  context.stroke();
+  const arm = middle - 3;
+  context.lineCap = 'round';
+  for (const [style, lineWidth] of [
+    [colour.sheet, 5],
+    [colour.madder, 2],
+  ] as const) {
+    context.strokeStyle = style;
+    context.lineWidth = lineWidth;
+    context.beginPath();
+    context.moveTo(middle - arm, middle - arm);
+    context.lineTo(middle + arm, middle + arm);
+    context.moveTo(middle + arm, middle - arm);
+    context.lineTo(middle - arm, middle + arm);
+    context.stroke();
+  }
 }
 
 /** A pin of paper with an ink outline; its tip is the place. */

@@ -5,5 +5,6 @@ export const mapPalette = {
   ...palette,
   sheet: '#FBF9F3',
   water: '#E3E6E4',
+  netNewGround: '#F6E9E4E6',
   openSpace: '#EFF0E4',
 } as const;

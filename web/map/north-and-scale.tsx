@@ -16,7 +16,7 @@ export function NorthAndScale({ metresToPixel }: NorthAndScaleProps) {
   const label = lengthM >= 1000 ? `${number(lengthM / 1000)} km` : `${number(lengthM)} m`;
   return (
     <svg
-      width={barWidthPx + 64}
+      width={38 + lengthPx + 10}
       height={64}
       role="img"
       aria-label={`True north is up; the scale bar is ${label} long.`}

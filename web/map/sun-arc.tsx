@@ -31,9 +31,11 @@ export interface SunArcProps {
 
 const top = 26;
 const baseline = 128;
-const bands = { beforeBottom: 194, afterBottom: 220, height: 17 };
-const bottomWithBands = 228;
+const bands = { beforeBottom: 192, afterBottom: 220, height: 22 };
+const bottomWithBands = 226;
 const bottomWithoutBands = 164;
+/** Narrower arcs have no room for words beside the times. */
+const roomForWordsPx = 480;
 
 /**
  * The time control under the map: the day's altitude curve with the judged hours shaded. The handle
@@ -67,6 +69,7 @@ function ArcDrawing({
   const drawing = useRef<SVGSVGElement>(null);
   const frame = layOutArc(day, { left: 50, right: width - 12, top, baseline });
   const height = samples === null ? bottomWithoutBands : bottomWithBands;
+  const hasRoom = width >= roomForWordsPx;
   const atText = (ms: number) => formatInstant(ms, day.timeZone);
   const x = xOfInstant(frame, atMs);
   const y = yOfAltitude(frame, Math.max(0, altitudeDeg));
@@ -101,7 +104,7 @@ function ArcDrawing({
           stroke="var(--color-marigold)"
           strokeWidth={1.8}
         />
-        <DayMarks frame={frame} day={day} />
+        <DayMarks frame={frame} day={day} hasRoom={hasRoom} />
         {samples === null ? null : (
           <Bands frame={frame} samples={samples} hatch={`url(#${hatchId})`} />
         )}
@@ -213,7 +216,7 @@ function Axis({ frame, day }: { frame: ArcFrame; day: SunDay }) {
 }
 
 /** Sunrise, the highest sun and sunset, with their times. */
-function DayMarks({ frame, day }: { frame: ArcFrame; day: SunDay }) {
+function DayMarks({ frame, day, hasRoom }: { frame: ArcFrame; day: SunDay; hasRoom: boolean }) {
   const formats = useFormats();
   const clock = (ms: number) => formats.clock(new Date(ms).toISOString());
   const y = baseline + 34;
@@ -231,15 +234,18 @@ function DayMarks({ frame, day }: { frame: ArcFrame; day: SunDay }) {
       />
       {day.sunriseMs === null ? null : (
         <text x={xOfInstant(frame, day.sunriseMs)} y={y}>
-          sunrise {clock(day.sunriseMs)}
+          {hasRoom ? 'sunrise ' : ''}
+          {clock(day.sunriseMs)}
         </text>
       )}
       <text x={noonX} y={y} textAnchor="middle">
-        noon {clock(day.noonMs)}
+        {hasRoom ? 'noon ' : ''}
+        {clock(day.noonMs)}
       </text>
       {day.sunsetMs === null ? null : (
         <text x={xOfInstant(frame, day.sunsetMs)} y={y} textAnchor="end">
-          sunset {clock(day.sunsetMs)}
+          {hasRoom ? 'sunset ' : ''}
+          {clock(day.sunsetMs)}
         </text>
       )}
     </g>
@@ -253,7 +259,11 @@ interface BandsProps {
 }
 
 function Bands({ frame, samples, hatch }: BandsProps) {
-  const paths = bandPaths(samples, { ...bands, xOf: (atMs) => xOfInstant(frame, atMs) });
+  const xOf = (atMs: number) => xOfInstant(frame, atMs);
+  const paths = bandPaths(samples, { ...bands, xOf });
+  // The whole height stands for the whole open area in sun.
+  const fromX = xOf(samples.at(0)?.atMs ?? frame.fromMs);
+  const toX = xOf(samples.at(-1)?.atMs ?? frame.toMs);
   return (
     <g>
       {[
@@ -264,13 +274,13 @@ function Bands({ frame, samples, hatch }: BandsProps) {
           <text x={0} y={bottom - 4}>
             {label}
           </text>
-          <line
-            x1={frame.left}
-            x2={frame.right}
-            y1={bottom}
-            y2={bottom}
-            stroke="var(--color-ink)"
-            strokeOpacity={0.35}
+          <rect
+            x={fromX}
+            y={bottom - bands.height}
+            width={toX - fromX}
+            height={bands.height}
+            fill="var(--color-sheet)"
+            stroke="var(--color-hairline)"
           />
         </g>
       ))}

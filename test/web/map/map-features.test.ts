@@ -24,7 +24,7 @@ const block = (id: string, topM: number, role: MapBlock['role'] = 'proposed'): M
 describe('blockFeatures', () => {
   it('draws a tower after its podium, whatever their order', () => {
     const { features } = blockFeatures([block('tower', 44), block('podium', 14)]);
-    expect(features.map((one) => one.properties?.['id'])).toEqual(['podium', 'tower']);
+    expect(features.map((one) => one.properties.id)).toEqual(['podium', 'tower']);
   });
 });
 
@@ -34,13 +34,19 @@ describe('blockLabelFeatures', () => {
       [block('tower', 44), block('old', 7, 'existing'), block('podium', 14)],
       (heightM) => `+${heightM} m`,
     );
-    expect(features.map((one) => one.properties.text)).toEqual(['+14 m', '+44 m']);
+    expect(features.map((one) => one.properties.text)).toEqual(['+44 m', '+14 m']);
   });
 
-  it('sets the labels of blocks on one another into different corners', () => {
-    const { features } = blockLabelFeatures([block('a', 1), block('b', 2)], String);
-    expect(features[0]?.geometry.coordinates).toEqual([-91.3, 46.751]);
-    expect(features[1]?.geometry.coordinates[0]).toBeCloseTo(-91.299, 9);
+  it('sets the label of a tower into its middle and that of its podium aside', () => {
+    const podium: MapBlock = { ...block('podium', 14), geometry: square(0, 0, 10) };
+    const tower: MapBlock = { ...block('tower', 44), geometry: square(4, 4, 5) };
+    const { features } = blockLabelFeatures([tower, podium], String);
+    const [onTower, onPodium] = features.map((one) => one.geometry.coordinates);
+    expect(onTower?.[0]).toBeCloseTo(6.5);
+    expect(onTower?.[1]).toBeCloseTo(6.5);
+    // Towards the podium's south-west corner, the farthest from the tower.
+    expect(onPodium?.[0]).toBeCloseTo(1.5);
+    expect(onPodium?.[1]).toBeCloseTo(1.5);
   });
 });
 

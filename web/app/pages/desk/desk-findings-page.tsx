@@ -1,6 +1,5 @@
 import type { StudyDetail } from '../../../../shared/contracts/studies.ts';
 import { findingSchema, type Finding } from '../../../../shared/study/evidence-schema.ts';
-import { Caution } from '../../../components/caution.tsx';
 import { EmptyState } from '../../../components/empty-state.tsx';
 import { Pager } from '../../../components/pager.tsx';
 import { QueryView } from '../../../components/query-view.tsx';
@@ -133,7 +132,6 @@ function StudyFindings({ reference, study }: { reference: string; study: StudyDe
         )}
       </QueryView>
       <StudyDownloads studyId={study.id} filter={filter} />
-      <Caution methodHref={paths.method.href()} />
     </div>
   );
 }

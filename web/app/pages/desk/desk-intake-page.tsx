@@ -24,7 +24,7 @@ export function DeskIntakePage() {
   const reviewCase = useDeskCase();
   const massings = useMassings(reviewCase.reference);
   return (
-    <div className="grid items-start gap-x-12 gap-y-8 lg:grid-cols-[minmax(0,3fr)_minmax(0,2fr)]">
+    <div className="grid items-start gap-x-12 gap-y-8 lg:grid-cols-[minmax(0,1fr)_19rem]">
       <div className="grid gap-8">
         {reviewCase.correction === null ? null : (
           <CorrectionNotice correction={reviewCase.correction} />
@@ -138,7 +138,7 @@ function NextSection({ reviewCase }: { reviewCase: CaseDetail }) {
   const isPublic = publicCaseStates.includes(reviewCase.state);
   return (
     <section
-      className="grid gap-3 border-t border-ink pt-4 lg:border-t-0 lg:border-s lg:border-hairline lg:ps-8 lg:pt-0"
+      className="grid gap-3 border-t border-ink pt-4 lg:sticky lg:top-4 lg:border-t-0 lg:border-s lg:border-hairline lg:ps-6 lg:pt-0"
       aria-labelledby="next-heading"
     >
       <h2 id="next-heading">What comes next</h2>

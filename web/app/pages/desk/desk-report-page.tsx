@@ -1,12 +1,10 @@
 import type { CaseDetail } from '../../../../shared/contracts/cases.ts';
-import { Caution } from '../../../components/caution.tsx';
 import { EmptyState } from '../../../components/empty-state.tsx';
 import { QueryView } from '../../../components/query-view.tsx';
 import { useToast } from '../../../components/toast.tsx';
 import { useReports } from '../../../features/reports/api/list-reports.ts';
 import { ReportEditor } from '../../../features/reports/components/report-editor.tsx';
 import { ReportList } from '../../../features/reports/components/report-list.tsx';
-import { paths } from '../../paths.ts';
 import { useDeskCase } from './desk-case-page.tsx';
 
 /** The staff report: written here, issued here, and every one that was issued. */
@@ -27,7 +25,6 @@ export function DeskReportPage() {
             )
           }
         </QueryView>
-        <Caution methodHref={paths.method.href()} />
       </section>
     </div>
   );

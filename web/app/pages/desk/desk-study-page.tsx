@@ -1,6 +1,5 @@
 import type { CaseDetail } from '../../../../shared/contracts/cases.ts';
 import type { StudyDetail } from '../../../../shared/contracts/studies.ts';
-import { Caution } from '../../../components/caution.tsx';
 import { ChoiceRow } from '../../../components/choice-row.tsx';
 import { EmptyState } from '../../../components/empty-state.tsx';
 import { Loading } from '../../../components/loading.tsx';
@@ -16,7 +15,6 @@ import { StudyRun } from '../../../features/studies/components/study-run.tsx';
 import { chooseStudy, finishedStudies } from '../../../features/studies/shown-study.ts';
 import { useFormats } from '../../../lib/place-context.ts';
 import { useSearchState } from '../../../lib/use-search-state.ts';
-import { paths } from '../../paths.ts';
 import { useDeskCase } from './desk-case-page.tsx';
 
 /** The study of a case: run it, then look at it hour by hour. */
@@ -146,15 +144,12 @@ function ShownStudy({ reviewCase, study }: { reviewCase: CaseDetail; study: Stud
           rows={rows.data}
         />
       )}
-      <div className="grid gap-1 border-t border-hairline pt-3 text-small">
-        <p className="break-all">
-          Study {study.digest}, engine {study.engine}, finished{' '}
-          {study.finishedAt === null ? '' : formats.instant(study.finishedAt)}. Rule:{' '}
-          {study.rule.title}, version {study.rule.version}
-          {study.rule.citation === '' ? '' : ` (${study.rule.citation})`}.
-        </p>
-        <Caution methodHref={paths.method.href()} />
-      </div>
+      <p className="border-t border-hairline pt-3 text-small">
+        Study <span className="break-all">{study.digest}</span>, engine {study.engine}
+        {study.finishedAt === null ? '' : `, finished ${formats.instant(study.finishedAt)}`}. Rule:{' '}
+        {study.rule.title}, version {study.rule.version}
+        {study.rule.citation === '' ? '' : ` (${study.rule.citation})`}.
+      </p>
     </div>
   );
 }

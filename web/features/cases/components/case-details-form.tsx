@@ -1,6 +1,7 @@
 import { zodResolver } from '@hookform/resolvers/zod';
 import type { ReactNode } from 'react';
-import { useController, useForm } from 'react-hook-form';
+import { useController, useForm, type Control } from 'react-hook-form';
+import type { z } from 'zod';
 import { createCaseInputSchema, type CreateCaseInput } from '../../../../shared/contracts/cases.ts';
 import { Button } from '../../../components/button.tsx';
 import { FormTextField } from '../../../components/form-text-field.tsx';
@@ -17,6 +18,8 @@ export interface CaseDetailsFormProps {
   renderParcels: (picked: readonly string[], onChange: (numbers: string[]) => void) => ReactNode;
 }
 
+type CaseDetailsValues = z.input<typeof createCaseInputSchema>;
+
 /** Name, description and site of an application. */
 export function CaseDetailsForm({
   initial,
@@ -31,10 +34,6 @@ export function CaseDetailsForm({
     resolver: zodResolver(createCaseInputSchema),
     defaultValues: initial,
   });
-  const {
-    field: { ref: parcelsRef, value: picked, onChange: setPicked },
-    fieldState: { error: parcelsError },
-  } = useController({ control, name: 'siteParcels' });
   const send = handleSubmit((input) => onSubmit(input));
   return (
     <form noValidate className="grid gap-6" onSubmit={(event) => void send(event)}>
@@ -54,15 +53,7 @@ export function CaseDetailsForm({
           optional
         />
       </div>
-      <fieldset className="grid gap-3" ref={parcelsRef} tabIndex={-1}>
-        <legend className="pb-1 font-strong">Parcels of the site</legend>
-        {parcelsError === undefined ? null : (
-          <p role="alert" className="text-small font-strong text-madder">
-            ✕ {parcelsError.message}
-          </p>
-        )}
-        {renderParcels(picked, setPicked)}
-      </fieldset>
+      <SiteParcelsField control={control} renderParcels={renderParcels} />
       {error === null ? null : <ProblemNotice error={error} />}
       <div className="flex flex-wrap gap-3">
         <Button type="submit" kind="primary" isPending={isPending}>
@@ -71,5 +62,28 @@ export function CaseDetailsForm({
         {onCancel === undefined ? null : <Button onPress={onCancel}>Leave it as it is</Button>}
       </div>
     </form>
+  );
+}
+
+interface SiteParcelsFieldProps extends Pick<CaseDetailsFormProps, 'renderParcels'> {
+  control: Control<CaseDetailsValues, unknown, z.output<typeof createCaseInputSchema>>;
+}
+
+/** On its own, so that the form looks for its first error in the order of the page. */
+function SiteParcelsField({ control, renderParcels }: SiteParcelsFieldProps) {
+  const {
+    field: { ref: parcelsRef, value: picked, onChange: setPicked },
+    fieldState: { error: parcelsError },
+  } = useController({ control, name: 'siteParcels' });
+  return (
+    <fieldset className="grid gap-3" ref={parcelsRef} tabIndex={-1}>
+      <legend className="pb-1 font-strong">Parcels of the site</legend>
+      {parcelsError === undefined ? null : (
+        <p role="alert" className="text-small font-strong text-madder">
+          ✕ {parcelsError.message}
+        </p>
+      )}
+      {renderParcels(picked, setPicked)}
+    </fieldset>
   );
 }

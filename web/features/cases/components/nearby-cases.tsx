@@ -30,9 +30,9 @@ export function NearbyCases({ parcels, cases }: NearbyCasesProps) {
                   to={paths.publicCase.href(reviewCase.reference, { receptor: parcel.number })}
                   className="link"
                 >
-                  What {reviewCase.title} changes here
+                  {reviewCase.title}: what changes here
                 </Link>
-                , about {formats.number(Math.round(distanceM / 10) * 10)} m away
+                , about {formats.number(Math.round(distanceM / 10) * 10)}&nbsp;m away
               </li>
             ))}
           </ul>

@@ -1,5 +1,4 @@
 import { useState } from 'react';
-import { Button } from 'react-aria-components/Button';
 import { ComboBox } from 'react-aria-components/ComboBox';
 import { Input } from 'react-aria-components/Input';
 import { ListBox, ListBoxItem } from 'react-aria-components/ListBox';
@@ -47,27 +46,18 @@ export function ParcelSearch({
         onPick(picked);
       }}
       value={null}
-      allowsEmptyCollection
+      allowsEmptyCollection={isLongEnough}
       menuTrigger="input"
     >
       <FieldLabel>{label}</FieldLabel>
       <FieldDescription>{description}</FieldDescription>
-      <div className="flex">
-        <Input className={inputClass} autoComplete="off" />
-        <Button className="-ms-px min-w-11 cursor-pointer border border-ink bg-sheet px-3">
-          <span aria-hidden="true">▾</span>
-        </Button>
-      </div>
+      <Input className={inputClass} autoComplete="off" />
       <Popover className="w-(--trigger-width) border border-ink bg-sheet">
         <ListBox<Parcel>
           className="max-h-80 overflow-auto py-1"
           renderEmptyState={() => (
             <p className="px-3 py-2 text-small text-ink-soft">
-              {!isLongEnough
-                ? 'Type a street and house number, or a parcel number.'
-                : parcels.isFetching
-                  ? 'Searching …'
-                  : 'No parcel matches. Try the street alone.'}
+              {parcels.isFetching ? 'Searching …' : 'No parcel matches. Try the street alone.'}
             </p>
           )}
         >

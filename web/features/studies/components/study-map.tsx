@@ -28,16 +28,14 @@ export interface StudyMapProps {
   /** A receptor and the place at which the person pointed. */
   onChoose: (receptor: string, lngLat: LngLat) => void;
   pins?: readonly MapPin[];
-  /** Where the same stands as a table. */
-  tableId: string;
 }
 
-const marginM = 90;
+const marginM = 40;
 const fallbackWidth = 760;
 
 /** The study on the map: the site, the shadows of the instant, who is judged and who is chosen. */
 export function StudyMap(props: StudyMapProps) {
-  const { study, site, evidence, rows, shadows, layer, chosen, onChoose, pins, tableId } = props;
+  const { study, site, evidence, rows, shadows, layer, chosen, onChoose, pins } = props;
   const { municipality } = usePlace();
   const { camera, onCameraChange } = useCameraInUrl();
   const blocks = useMemo(() => mapBlocksOf(evidence), [evidence]);
@@ -73,16 +71,7 @@ export function StudyMap(props: StudyMapProps) {
       }}
       titleBlock={<MapTitleBlock block={titleBlock} />}
       fallback={<StudyPlan {...props} bounds={bounds} titleBlock={titleBlock} />}
-      alternative={
-        <p>
-          Point at a receptor to read its account, or choose it in{' '}
-          <a href={`#${tableId}`} className="link">
-            the table that says the same
-          </a>
-          .
-        </p>
-      }
-      className="h-[26rem] sm:h-[32rem] lg:h-[36rem]"
+      className="h-[26rem] lg:h-[clamp(24rem,100vh-30rem,44rem)]"
     />
   );
 }

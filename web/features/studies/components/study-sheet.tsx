@@ -63,6 +63,12 @@ export function StudySheet({
 
   return (
     <section aria-label="Map and time of day" className="grid content-start gap-3">
+      <ChoiceRow
+        label="What the map shows"
+        options={layers}
+        value={layer}
+        onChange={(next) => change({ layer: next })}
+      />
       <StudyMap
         study={study}
         site={site}
@@ -73,21 +79,12 @@ export function StudySheet({
         chosen={chosen}
         onChoose={onChoose}
         {...(pins === undefined ? {} : { pins })}
-        tableId={tableId}
       />
-      <div className="flex flex-wrap items-baseline justify-between gap-x-6 gap-y-1">
-        <DateChoice
-          keyDates={study.keyDates}
-          value={date}
-          onChange={(next) => change({ date: next })}
-        />
-        <ChoiceRow
-          label="What the map shows"
-          options={layers}
-          value={layer}
-          onChange={(next) => change({ layer: next })}
-        />
-      </div>
+      <DateChoice
+        keyDates={study.keyDates}
+        value={date}
+        onChange={(next) => change({ date: next })}
+      />
       {steps === null ? (
         <p>The sun does not rise on {formats.date(date)}.</p>
       ) : (
@@ -112,6 +109,13 @@ export function StudySheet({
         <ProblemNotice error={shadows.error} onRetry={() => void shadows.refetch()} />
       ) : null}
       <MapKey />
+      <p className="text-small">
+        Point at a receptor to read its account, or choose it in{' '}
+        <a href={`#${tableId}`} className="link">
+          the table that says the same
+        </a>
+        .
+      </p>
     </section>
   );
 }

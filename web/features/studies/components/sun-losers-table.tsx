@@ -26,7 +26,7 @@ interface LoserRow extends SunLoser {
   detail: ReceptorDetail | undefined;
 }
 
-const shownAtFirst = 8;
+const shownAtFirst = 6;
 const shownMore = 20;
 
 /** Who loses sun on the chosen day: where the rule is not met first, then by the hours lost. */
@@ -53,7 +53,10 @@ export function SunLosersTable({
       </div>
     );
   }
-  const rows = shown.map((loser, index): LoserRow => ({ ...loser, detail: details[index]?.data }));
+  const rows = inOrderOfLedgers(
+    shown.map((loser, index): LoserRow => ({ ...loser, detail: details[index]?.data })),
+    day.date,
+  );
   const untouched = receptorCount - losers.length;
   const hidden = losers.length - rows.length;
   return (
@@ -70,7 +73,9 @@ export function SunLosersTable({
       <p className="flex flex-wrap gap-x-4 text-small">
         {hidden > 0 ? (
           <Button kind="plain" onPress={() => setShownCount(shownCount + shownMore)}>
-            Show {Math.min(hidden, shownMore)} more of {hidden}
+            {hidden > shownMore
+              ? `Show ${shownMore} more of ${hidden}`
+              : `Show the other ${hidden}`}
           </Button>
         ) : null}
         <span className="py-0.5">
@@ -80,6 +85,17 @@ export function SunLosersTable({
         </span>
       </p>
     </div>
+  );
+}
+
+/** Once every ledger is there its figures give the order; until then the hourly shares do. */
+function inOrderOfLedgers(rows: readonly LoserRow[], date: string): LoserRow[] {
+  const lostOf = (row: LoserRow) => ledgerDayOf(row.detail?.ledger, date)?.sunHours.lost;
+  if (rows.some((row) => lostOf(row) === undefined)) return [...rows];
+  return rows.toSorted(
+    (a, b) =>
+      Number(b.finding === 'not-met') - Number(a.finding === 'not-met') ||
+      (lostOf(b) ?? 0) - (lostOf(a) ?? 0),
   );
 }
 
@@ -114,7 +130,7 @@ function loserColumns(
     {
       id: 'bands',
       header: `${clock(fromMs)} – ${clock(toMs)}, before over after`,
-      className: 'w-40',
+      className: 'sm:w-40',
       cell: (row) => {
         const ledgerDay = ledgerDayOf(row.detail?.ledger, day.date);
         return (
@@ -132,18 +148,30 @@ function loserColumns(
       className: 'whitespace-nowrap',
       cell: (row) => {
         const ledgerDay = ledgerDayOf(row.detail?.ledger, day.date);
-        return ledgerDay === null ? '…' : formats.hours(ledgerDay.sunHours.lost);
+        return (
+          <>
+            {ledgerDay === null ? '…' : formats.hours(ledgerDay.sunHours.lost)}
+            <span className="block sm:hidden">
+              <LoserFinding row={row} />
+            </span>
+          </>
+        );
       },
     },
     {
       id: 'finding',
       header: 'Rule',
-      cell: (row) =>
-        row.finding === null ? (
-          <span className="text-ink-soft">not judged</span>
-        ) : (
-          <FindingMark finding={row.finding} close={row.isClose} />
-        ),
+      // On a telephone it stands below the hours lost.
+      className: 'hidden sm:table-cell',
+      cell: (row) => <LoserFinding row={row} />,
     },
   ];
+}
+
+function LoserFinding({ row }: { row: SunLoser }) {
+  return row.finding === null ? (
+    <span className="text-ink-soft">not judged</span>
+  ) : (
+    <FindingMark finding={row.finding} close={row.isClose} />
+  );
 }
