@@ -47,7 +47,8 @@ export function standardClockToMs(date: string, clock: string, timeZone: string)
 /** The zone's smallest offset from UTC of a year, in minutes: what the rule model calls standard time. */
 export function standardOffsetMin(year: number, timeZone: string): number {
   let smallest = Infinity;
-  for (let atMs = Date.UTC(year, 0, 1); atMs < Date.UTC(year + 1, 0, 1); atMs += dayMs) {
+  // No zone has kept a summer or a winter time for less than ten days.
+  for (let atMs = Date.UTC(year, 0, 1); atMs < Date.UTC(year + 1, 0, 1); atMs += 10 * dayMs) {
     smallest = Math.min(smallest, DateTime.fromMillis(atMs, { zone: timeZone }).offset);
   }
   return smallest;

@@ -1,4 +1,7 @@
-import { createLocalPlane } from '../geometry/local-plane.ts';
+import type { Polygonal } from '../geometry/geojson-schema.ts';
+import { createLocalPlane, type LocalPlane } from '../geometry/local-plane.ts';
+import { polygonsOf } from '../geometry/project-polygon.ts';
+import { signedRingArea } from '../geometry/ring.ts';
 import { expandDays } from '../rules/rule-days.ts';
 import { windowSpans } from '../rules/rule-window.ts';
 import { studyInputSchema, type StudyInput } from './evidence-schema.ts';
@@ -37,19 +40,38 @@ export function readStudyInput(value: unknown): ReadStudyInput {
 
 function footprintIssues(input: StudyInput): InputIssue[] {
   const plane = createLocalPlane(input.place.longitude, input.place.latitude);
-  const message =
-    'a ring crosses itself or a hole lies outside its shell; send a valid polygon (OGC simple features)';
+  const issuesOf = (geometry: Polygonal, path: string): InputIssue[] => {
+    if (hasEmptyShell(geometry, plane)) {
+      return [{ path, message: 'an outer ring encloses no area; send a valid polygon' }];
+    }
+    if (backwardAreaM2(geometry, plane) > leastBackwardM2) {
+      return [
+        {
+          path,
+          message:
+            'a ring crosses itself or a hole lies outside its shell; send a valid polygon (OGC simple features)',
+        },
+      ];
+    }
+    return [];
+  };
   const inCollection = (name: 'blocks' | 'receptors') =>
     input[name].features.flatMap(({ geometry }, index) =>
-      backwardAreaM2(geometry, plane) > leastBackwardM2
-        ? [{ path: `${name}.features.${index}.geometry`, message }]
-        : [],
+      issuesOf(geometry, `${name}.features.${index}.geometry`),
     );
-  const site =
-    input.site !== undefined && backwardAreaM2(input.site, plane) > leastBackwardM2
-      ? [{ path: 'site', message }]
-      : [];
-  return [...site, ...inCollection('blocks'), ...inCollection('receptors')];
+  return [
+    ...(input.site === undefined ? [] : issuesOf(input.site, 'site')),
+    ...inCollection('blocks'),
+    ...inCollection('receptors'),
+  ];
+}
+
+/** As of a ring whose two halves, crossed, cancel each other. */
+function hasEmptyShell(geometry: Polygonal, plane: LocalPlane): boolean {
+  return polygonsOf(geometry).some(
+    ([shell = []]) =>
+      Math.abs(signedRingArea(shell.map((lngLat) => plane.toPlane(lngLat)))) < leastBackwardM2,
+  );
 }
 
 function windowIssues(input: StudyInput): InputIssue[] {
