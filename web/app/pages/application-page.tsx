@@ -24,14 +24,17 @@ import { RevisionComparison } from '../../features/massings/components/revision-
 import { RevisionTable } from '../../features/massings/components/revision-table.tsx';
 import { drawnBlocksOf } from '../../features/massings/drawn-block.ts';
 import { SiteParcelPicker } from '../../features/places/components/site-parcel-picker.tsx';
+import { isApiError } from '../../lib/api-error.ts';
 import { useFormats, usePlace } from '../../lib/place-context.ts';
 import { useSearchState } from '../../lib/use-search-state.ts';
 import { paths } from '../paths.ts';
+import { NotFoundPage } from './not-found-page.tsx';
 
 /** One application as its applicant sees it: from the site to the submission. */
 export function ApplicationPage() {
   const { reference = '' } = useParams();
   const reviewCase = useCase(reference);
+  if (isApiError(reviewCase.error, 'NOT_FOUND')) return <NotFoundPage />;
   return (
     <div className="sheet-width grid gap-8 py-8">
       <QueryView query={reviewCase} what="the application">
@@ -72,25 +75,27 @@ function Application({ reviewCase }: { reviewCase: CaseDetail }) {
       {reviewCase.correction === null ? null : (
         <CorrectionNotice correction={reviewCase.correction} />
       )}
-      <section className="grid gap-3" aria-labelledby="next-heading">
-        <h2 id="next-heading">What comes next</h2>
-        {reviewCase.transitions.length === 0 ? (
-          <p>There is nothing to do for you at the moment.</p>
-        ) : (
-          <CaseTransitions
-            reviewCase={reviewCase}
-            onMoved={(moved) => {
-              showToast(
-                moved.state === 'submitted'
-                  ? `Submitted as case ${moved.reference}.`
-                  : `The application is now: ${caseStateWords[moved.state]}.`,
-              );
-              void navigate(paths.application.href(moved.reference), { replace: true });
-            }}
-          />
-        )}
-      </section>
-      <SiteSection reviewCase={reviewCase} />
+      <div className="grid gap-x-10 gap-y-8 lg:grid-cols-2">
+        <section className="grid content-start gap-3" aria-labelledby="next-heading">
+          <h2 id="next-heading">What comes next</h2>
+          {reviewCase.transitions.length === 0 ? (
+            <p>There is nothing to do for you at the moment.</p>
+          ) : (
+            <CaseTransitions
+              reviewCase={reviewCase}
+              onMoved={(moved) => {
+                showToast(
+                  moved.state === 'submitted'
+                    ? `Submitted as case ${moved.reference}.`
+                    : `The application is now: ${caseStateWords[moved.state]}.`,
+                );
+                void navigate(paths.application.href(moved.reference), { replace: true });
+              }}
+            />
+          )}
+        </section>
+        <SiteSection reviewCase={reviewCase} />
+      </div>
       <MassingSection reviewCase={reviewCase} />
       <section className="grid gap-3" aria-labelledby="history-heading">
         <h2 id="history-heading">What has happened</h2>
@@ -106,7 +111,10 @@ function SiteSection({ reviewCase }: { reviewCase: CaseDetail }) {
   const [isEditing, setIsEditing] = useState(false);
   const canEdit = reviewCase.abilities.includes('edit');
   return (
-    <section className="grid gap-3" aria-labelledby="site-heading">
+    <section
+      className={`grid content-start gap-3 ${isEditing ? 'lg:col-span-2' : ''}`}
+      aria-labelledby="site-heading"
+    >
       <h2 id="site-heading">Site and description</h2>
       {isEditing ? (
         <CaseDetailsForm
@@ -181,11 +189,9 @@ function MassingSection({ reviewCase }: { reviewCase: CaseDetail }) {
       <QueryView query={massings} what="the revisions">
         {({ rows }) =>
           rows.length === 0 ? (
-            <EmptyState title="No massing is stored yet.">
-              {canUpload ? (
-                <p>Choose the file above; you see how it was read before it is sent.</p>
-              ) : null}
-            </EmptyState>
+            canUpload ? null : (
+              <EmptyState title="No massing is stored." />
+            )
           ) : (
             <Revisions reviewCase={reviewCase} revisions={rows} />
           )

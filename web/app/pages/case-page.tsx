@@ -11,17 +11,20 @@ import { CaseFinding } from '../../features/cases/components/case-finding.tsx';
 import { CaseHistory } from '../../features/cases/components/case-history.tsx';
 import { describeProposal } from '../../features/cases/proposal-in-words.ts';
 import { useComments } from '../../features/comments/api/list-comments.ts';
+import { isApiError } from '../../lib/api-error.ts';
 import { useFormats } from '../../lib/place-context.ts';
 import type { MapPin } from '../../map/map-features.ts';
 import { CaseChangesSection } from './case-changes-section.tsx';
 import { CaseCommentsSection } from './case-comments-section.tsx';
 import { CaseDocumentsSection } from './case-documents-section.tsx';
+import { NotFoundPage } from './not-found-page.tsx';
 import { useChosenPlace } from './use-chosen-place.ts';
 
 /** One case for everybody: what is proposed, what it changes at a place, documents, comments. */
 export function CasePage() {
   const { reference = '' } = useParams();
   const reviewCase = useCase(reference);
+  if (isApiError(reviewCase.error, 'NOT_FOUND')) return <NotFoundPage />;
   return (
     <div className="sheet-width py-8">
       <QueryView query={reviewCase} what="the case">

@@ -27,7 +27,8 @@ export function HomePage() {
   const allCases = useCases({ view: 'public', pageSize: mostCases });
   const parcels = useParcels({ q: words, pageSize: mostParcels }, { enabled: words !== '' });
   const foundParcels = words === '' ? [] : (parcels.data?.rows ?? []);
-  const rows = cases.data?.rows;
+  // Where no case matches, the map still shows them all: the address may lie beside one.
+  const rows = cases.data?.total === 0 ? allCases.data?.rows : cases.data?.rows;
   const pins = useMemo(
     () =>
       (rows ?? []).flatMap(({ reference, title, sitePoint }) =>
@@ -58,11 +59,18 @@ export function HomePage() {
             <NearbyCases parcels={foundParcels} cases={allCases.data?.rows ?? []} />
           </section>
         ) : null}
-        <section className="grid gap-2" aria-label="Cases">
+        <section className="grid gap-2" aria-labelledby="found-cases">
+          <h2 id="found-cases" className="sr-only">
+            Cases
+          </h2>
           <QueryView query={cases} what="the cases">
             {(page) =>
               page.rows.length === 0 ? (
-                <NoCases words={words} onClear={() => setSearch(null)} />
+                <NoCases
+                  words={words}
+                  hasParcels={foundParcels.length > 0}
+                  onClear={() => setSearch(null)}
+                />
               ) : (
                 <>
                   <p className="text-small text-ink-soft" role="status">
@@ -98,7 +106,14 @@ export function HomePage() {
   );
 }
 
-function NoCases({ words, onClear }: { words: string; onClear: () => void }) {
+interface NoCasesProps {
+  words: string;
+  /** Addresses were found, and stand above. */
+  hasParcels: boolean;
+  onClear: () => void;
+}
+
+function NoCases({ words, hasParcels, onClear }: NoCasesProps) {
   if (words === '') {
     return (
       <EmptyState title="No case is open at the moment.">
@@ -107,8 +122,12 @@ function NoCases({ words, onClear }: { words: string; onClear: () => void }) {
     );
   }
   return (
-    <EmptyState title={`No case itself matches “${words}”.`}>
-      <p>Try the street without the house number, or look through all open cases.</p>
+    <EmptyState
+      title={hasParcels ? `No case stands at “${words}” itself.` : `Nothing matches “${words}”.`}
+    >
+      {hasParcels ? null : (
+        <p>Try the street without the house number, or look through all open cases.</p>
+      )}
       <Button onPress={onClear}>Show all open cases</Button>
     </EmptyState>
   );

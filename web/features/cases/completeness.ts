@@ -10,7 +10,7 @@ export interface CompletenessItem {
 }
 
 const counted = (count: number, one: string, many: string) =>
-  `${count} ${count === 1 ? one : many}`;
+  count === 0 ? `no ${one}` : `${count} ${count === 1 ? one : many}`;
 
 /** What a planner checks before an application is declared complete, as far as the file can tell. */
 export function listCompleteness(

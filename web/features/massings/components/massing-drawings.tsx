@@ -14,7 +14,8 @@ export interface MassingDrawingsProps {
   site: Polygonal | null;
 }
 
-const drawing = { width: 420, height: 340 } as const;
+/** Smaller than it is shown, so that the drawing's letters, made for paper, can be read on a screen. */
+const drawing = { width: 310, height: 250 } as const;
 const marginM = 18;
 
 const viewpoints = [

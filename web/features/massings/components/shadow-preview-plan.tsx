@@ -19,6 +19,7 @@ export interface ShadowPreviewPlanProps {
 }
 
 const widthPx = 720;
+const tallestRem = 36;
 
 /** The shadows of the blocks on level ground, from raw contours filled by the NonZero rule. */
 export function ShadowPreviewPlan({ blocks, site, sun, extent, label }: ShadowPreviewPlanProps) {
@@ -37,12 +38,15 @@ export function ShadowPreviewPlan({ blocks, site, sun, extent, label }: ShadowPr
   const coming = contoursPath(shadowContours(blocks, 'proposed', sun), frame.toSheet);
 
   return (
-    <div className="border border-hairline bg-sheet">
+    <div
+      className="border border-hairline bg-sheet"
+      style={{ maxWidth: `${((tallestRem * frame.width) / frame.height).toFixed(1)}rem` }}
+    >
       <svg
         viewBox={`0 0 ${frame.width} ${frame.height.toFixed(1)}`}
         role="img"
         aria-label={label}
-        className="block h-auto max-h-[36rem] w-full"
+        className="block h-auto w-full"
       >
         <defs>
           <pattern

@@ -1,7 +1,9 @@
 import { useMemo, useState } from 'react';
 import type { PlaneExtent } from '../../../../shared/drawing/frame.ts';
 import type { Polygonal } from '../../../../shared/geometry/geojson-schema.ts';
-import { joinBoxes } from '../../../../shared/geometry/ring.ts';
+import { createLocalPlane } from '../../../../shared/geometry/local-plane.ts';
+import { projectPolygon } from '../../../../shared/geometry/project-polygon.ts';
+import { boxOfRings, joinBoxes } from '../../../../shared/geometry/ring.ts';
 import { shadowBox, shadowVector } from '../../../../shared/shadow/shadow-contours.ts';
 import { civilDateOf, formatInstant } from '../../../../shared/solar/civil-time.ts';
 import { sunPositionAt } from '../../../../shared/solar/sun-position.ts';
@@ -39,8 +41,8 @@ export function ShadowPreview({ blocks, site }: ShadowPreviewProps) {
     [date, timeZone, longitude, latitude],
   );
   const extent = useMemo(
-    () => (day === null ? null : reachOf(planeBlocks, day, { longitude, latitude })),
-    [planeBlocks, day, longitude, latitude],
+    () => (day === null ? null : reachOf(planeBlocks, site, day, { longitude, latitude })),
+    [planeBlocks, site, day, longitude, latitude],
   );
   const steps = useMemo(() => (day === null ? null : listArcSteps(day, null)), [day]);
   const [chosenMs, setChosenMs] = useState<number | null>(null);
@@ -102,9 +104,10 @@ export function ShadowPreview({ blocks, site }: ShadowPreviewProps) {
   );
 }
 
-/** The ground that a day's shadows reach, but for those of a low sun. */
+/** The site and the ground that a day's shadows reach, but for those of a low sun. */
 function reachOf(
   blocks: readonly PreviewBlock[],
+  site: Polygonal | null,
   day: SunDay,
   place: { longitude: number; latitude: number },
 ): PlaneExtent | null {
@@ -117,6 +120,10 @@ function reachOf(
     block.box,
     ...ways.flatMap((along) => shadowBox(block, along, 0) ?? []),
   ]);
+  if (site !== null) {
+    const plane = createLocalPlane(place.longitude, place.latitude);
+    boxes.push(boxOfRings(projectPolygon(site, plane)));
+  }
   const [first, ...rest] = boxes;
   if (first === undefined) return null;
   const box = rest.reduce(joinBoxes, first);

@@ -23,19 +23,18 @@ export function SessionMenu({ person, isLoading }: SessionMenuProps) {
       </Link>
     );
   }
-  const handleSignOut = () => {
+  const handleSignOut = async () => {
+    // First off the page: one that asks for an account would send the person to the sign-in.
+    await navigate(paths.home.href());
     deleteSession.mutate(undefined, {
-      onSuccess: () => {
-        void navigate(paths.home.href());
-        showToast('You are signed out.');
-      },
+      onSuccess: () => showToast('You are signed out.'),
       onError: (error) => showToast(error.message),
     });
   };
   return (
     <span className="flex items-baseline gap-3 py-1">
       <span className="text-ink-soft">{person.name}</span>
-      <Button kind="plain" isPending={deleteSession.isPending} onPress={handleSignOut}>
+      <Button kind="plain" isPending={deleteSession.isPending} onPress={() => void handleSignOut()}>
         Sign out
       </Button>
     </span>
