@@ -19,8 +19,9 @@ export function expandDays(days: readonly RuleDay[], year: number, place: Place)
   return days.map((day) => {
     if ('event' in day) return { isSeason: false, dates: [dateOfEvent(day.event, year, place)] };
     if ('date' in day) return { isSeason: false, dates: [dateOf(year, day.date)] };
-    if ('year' in day)
-      {return { isSeason: true, dates: datesBetween(`${year}-01-01`, `${year}-12-31`, 1) };}
+    if ('year' in day) {
+      return { isSeason: true, dates: datesBetween(`${year}-01-01`, `${year}-12-31`, 1) };
+    }
     const from = dateOf(year, day.from);
     const endsIn = day.to < day.from ? year + 1 : year;
     return { isSeason: true, dates: datesBetween(from, dateOf(endsIn, day.to), day.everyDays) };
