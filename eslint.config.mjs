@@ -145,11 +145,7 @@ export default defineConfig(
       'import-x/no-nodejs-modules': 'error',
     },
   },
-  {
-    files: ['web/**'],
-    plugins: { 'react-hooks': reactHooks },
-    rules: reactHooks.configs.recommended.rules,
-  },
+  { ...reactHooks.configs.flat.recommended, files: ['web/**'] },
   {
     files: ['api/start/**', 'api/cli/**', 'sample-data/**', 'test/bench/**'],
     rules: { 'no-console': 'off' },
