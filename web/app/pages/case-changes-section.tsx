@@ -90,11 +90,13 @@ function Changes({ reviewCase, study, place, pins, evidence, rows }: ChangesProp
   return (
     <div className="grid gap-x-10 gap-y-8 lg:grid-cols-[minmax(0,5fr)_minmax(0,7fr)]">
       <div className="grid content-start gap-6">
-        <ParcelSearch
-          label="Your address or parcel number"
-          description="Or point at your parcel on the map."
-          onPick={(parcel) => place.choose(parcel.number)}
-        />
+        <div className="no-print">
+          <ParcelSearch
+            label="Your address or parcel number"
+            description="Or point at your parcel on the map."
+            onPick={(parcel) => place.choose(parcel.number)}
+          />
+        </div>
         <PlaceAccount study={study} place={place} evidence={evidence} />
       </div>
       <StudySheet

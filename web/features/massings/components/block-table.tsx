@@ -11,6 +11,7 @@ export function BlockTable({ blocks }: { blocks: readonly DrawnBlock[] }) {
       caption="Blocks"
       columns={blockColumns(formats)}
       rows={blocks.toSorted((a, b) => b.topM - a.topM)}
+      stacksWhenNarrow
       rowKey={(block) => block.id}
     />
   );

@@ -14,8 +14,9 @@ export interface MassingDrawingsProps {
   site: Polygonal | null;
 }
 
-/** Smaller than it is shown, so that the drawing's letters, made for paper, can be read on a screen. */
-const drawing = { width: 310, height: 250 } as const;
+/** Smaller than they are shown, so that the drawings' letters, made for paper, can be read on a screen. */
+const planWidth = 220;
+const axonometric = { width: 310, height: 250 } as const;
 const marginM = 18;
 
 const viewpoints = [
@@ -46,7 +47,7 @@ export function MassingDrawings({ blocks, site }: MassingDrawingsProps) {
       {
         origin: { longitude, latitude },
         extent,
-        width: drawing.width,
+        width: planWidth,
         label: 'The blocks in plan with the site boundary; the table of blocks says the same.',
         figures: formats.figure,
         detail: 'sheet',
@@ -55,7 +56,7 @@ export function MassingDrawings({ blocks, site }: MassingDrawingsProps) {
     );
   }, [blocks, sites, longitude, latitude, formats]);
 
-  const axonometric = useMemo(
+  const view = useMemo(
     () =>
       drawAxonometric(
         blocks.map(({ role, ...block }) => ({
@@ -65,7 +66,7 @@ export function MassingDrawings({ blocks, site }: MassingDrawingsProps) {
         { site: sites, parcels: [] },
         {
           origin: { longitude, latitude },
-          ...drawing,
+          ...axonometric,
           view: { fromDeg: viewpoint.fromDeg, altitudeDeg: 35 },
           label: `The blocks seen from the ${viewpoint.id}; the table of blocks says the same.`,
           figures: formats.figure,
@@ -84,7 +85,7 @@ export function MassingDrawings({ blocks, site }: MassingDrawingsProps) {
         </figcaption>
       </figure>
       <figure className="grid gap-2">
-        <SvgDrawing markup={axonometric} className="border border-hairline" />
+        <SvgDrawing markup={view} className="border border-hairline" />
         <figcaption className="grid gap-1 text-small">
           <span className="text-ink-soft">In three dimensions, with the height of each top.</span>
           <ChoiceRow

@@ -53,6 +53,7 @@ export function RevisionComparison({ reference, revisions }: RevisionComparisonP
               hideCaption
               columns={comparisonColumns(formats)}
               rows={blocks}
+              stacksWhenNarrow
               rowKey={(block) => `${block.id} ${block.change}`}
             />
           </>

@@ -7,6 +7,7 @@ import { projectPolygon } from '../../../../shared/geometry/project-polygon.ts';
 import type { SunPosition } from '../../../../shared/solar/sun-position.ts';
 import { usePlace } from '../../../lib/place-context.ts';
 import { NorthAndScale } from '../../../map/north-and-scale.tsx';
+import { useWidth } from '../../../map/use-width.ts';
 import { contoursPath, shadowContours, type PreviewBlock } from '../shadow-preview.ts';
 
 export interface ShadowPreviewPlanProps {
@@ -18,7 +19,7 @@ export interface ShadowPreviewPlanProps {
   label: string;
 }
 
-const widthPx = 720;
+const firstWidthPx = 720;
 const tallestRem = 36;
 
 /** The shadows of the blocks on level ground, from raw contours filled by the NonZero rule. */
@@ -27,7 +28,11 @@ export function ShadowPreviewPlan({ blocks, site, sun, extent, label }: ShadowPr
   const hatchId = useId();
   const maskId = useId();
   const plane = useMemo(() => createLocalPlane(longitude, latitude), [longitude, latitude]);
-  const frame = useMemo(() => createFrame(plane, extent, widthPx), [plane, extent]);
+  const [holder, widthPx] = useWidth<HTMLDivElement>();
+  const frame = useMemo(
+    () => createFrame(plane, extent, widthPx ?? firstWidthPx),
+    [plane, extent, widthPx],
+  );
   const siteRings = site === null ? [] : projectPolygon(site, plane);
   const footprints = (role: PreviewBlock['role']) =>
     contoursPath(
@@ -39,6 +44,7 @@ export function ShadowPreviewPlan({ blocks, site, sun, extent, label }: ShadowPr
 
   return (
     <div
+      ref={holder}
       className="border border-hairline bg-sheet"
       style={{ maxWidth: `${((tallestRem * frame.width) / frame.height).toFixed(1)}rem` }}
     >
