@@ -152,12 +152,12 @@ function readNumber(entries: readonly Entry[], say: Say, label: BlockLabel): num
   return null;
 }
 
-/** A finite number, or one written out as text with a decimal point. */
+/** A finite number, or one written out as text with a decimal point; −0 is 0. */
 function toNumber(value: unknown): number | null {
-  if (typeof value === 'number') return Number.isFinite(value) ? value : null;
+  if (typeof value === 'number') return Number.isFinite(value) ? value + 0 : null;
   if (typeof value !== 'string' || !/^[+-]?\d+(\.\d+)?$/.test(value.trim())) return null;
   const number = Number(value);
-  return Number.isFinite(number) ? number : null;
+  return Number.isFinite(number) ? number + 0 : null;
 }
 
 function sayNumberAsText({ name, value }: Entry, number: number, say: Say, label: BlockLabel) {

@@ -35,8 +35,8 @@ export interface FootprintOverlap {
 /** What every check looks at, prepared once. */
 export interface MassingScene {
   site: MassingSite;
-  footprints: BlockFootprint[];
-  /** Those that lie within the municipality: only these can be compared with the site and with each other. */
+  blocks: readonly MassingBlock[];
+  /** The footprints within the municipality: the local plane is true for these alone. */
   located: BlockFootprint[];
   /** The rings of the site's parcels on the plane. */
   siteRings: Ring[];
@@ -56,13 +56,12 @@ export function createMassingScene(
   site: MassingSite,
 ): MassingScene {
   const plane = createLocalPlane(site.longitude, site.latitude);
-  const footprints = blocks.map((block) => toBlockFootprint(block, plane));
-  const located = footprints.filter(
-    ({ block }) => findPositionOutside(block, site.extent) === null,
-  );
+  const located = blocks
+    .filter((block) => findPositionOutside(block, site.extent) === null)
+    .map((block) => toBlockFootprint(block, plane));
   return {
     site,
-    footprints,
+    blocks,
     located,
     siteRings: site.parcels.flatMap((parcel) => toPlaneOutlines(parcel, plane).flat()),
     ...listOverlaps(located),

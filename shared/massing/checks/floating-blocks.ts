@@ -14,6 +14,8 @@ export const checkFloatingBlocks: MassingCheck = ({ located, overlaps, isEveryPa
   return located.flatMap((footprint): MassingIssue[] => {
     const { block } = footprint;
     if (block.role !== 'proposed' || !(block.baseM > leastGapM)) return [];
+    // Heights that make no block have their own issue.
+    if (!(block.topM > block.baseM)) return [];
     const below = overlaps.flatMap(({ a, b }) => {
       if (a !== footprint && b !== footprint) return [];
       const other = a === footprint ? b.block : a.block;

@@ -3,8 +3,8 @@ import { createIssue } from '../issue-severities.ts';
 import { findFirstCorner, leastAreaM2, type MassingCheck } from '../massing-scene.ts';
 
 /** A footprint covers some ground. */
-export const checkFootprintSize: MassingCheck = ({ footprints }) =>
-  footprints.flatMap(({ block, areaM2 }) => {
+export const checkFootprintSize: MassingCheck = ({ located }) =>
+  located.flatMap(({ block, areaM2 }) => {
     if (areaM2 === null || areaM2 >= leastAreaM2) return [];
     const label = labelBlock(block);
     return createIssue(

@@ -9,8 +9,8 @@ import { findFirstCorner, type MassingCheck } from '../massing-scene.ts';
  * Base and top are numbers, top lies above base, and neither is beyond what a building reaches; a block that stays
  * below the ground is said to cast no shadow.
  */
-export const checkHeights: MassingCheck = ({ footprints }) =>
-  footprints.flatMap(({ block }) => checkBlock(block) ?? []);
+export const checkHeights: MassingCheck = ({ blocks }) =>
+  blocks.flatMap((block) => checkBlock(block) ?? []);
 
 function checkBlock(block: MassingBlock): MassingIssue | null {
   const { baseM, topM } = block;

@@ -15,8 +15,8 @@ const roundingM = 1e-6;
  * each other. Told by winding numbers, which are 0 or 1 everywhere in a sound footprint, so that touching and
  * coincident edges do no harm.
  */
-export const checkOutlines: MassingCheck = ({ footprints, toLngLat }) =>
-  footprints.flatMap(({ block, outlines, rings }) => {
+export const checkOutlines: MassingCheck = ({ located, toLngLat }) =>
+  located.flatMap(({ block, outlines, rings }) => {
     const label = labelBlock(block);
     const say: Say = (code, at, message, suggestion) =>
       createIssue(

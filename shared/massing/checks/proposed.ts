@@ -2,8 +2,8 @@ import { createIssue, wholeFile } from '../issue-severities.ts';
 import type { MassingCheck } from '../massing-scene.ts';
 
 /** A massing proposes at least one block. */
-export const checkProposed: MassingCheck = ({ footprints }) => {
-  if (footprints.some(({ block }) => block.role === 'proposed')) return [];
+export const checkProposed: MassingCheck = ({ blocks }) => {
+  if (blocks.some(({ role }) => role === 'proposed')) return [];
   return [
     createIssue(
       'MASSING_NOTHING_PROPOSED',

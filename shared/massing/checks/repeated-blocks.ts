@@ -6,10 +6,10 @@ import type { MassingIssue } from '../massing-issue.ts';
 import { findFirstCorner, type MassingCheck } from '../massing-scene.ts';
 
 /** No block stands twice with the same footprint, heights and role. */
-export const checkRepeatedBlocks: MassingCheck = ({ footprints }) => {
+export const checkRepeatedBlocks: MassingCheck = ({ blocks }) => {
   const seen = new Map<string, MassingBlock>();
   const issues: MassingIssue[] = [];
-  for (const { block } of footprints) {
+  for (const block of blocks) {
     const key = keyOf(block);
     const first = seen.get(key);
     if (first === undefined) {

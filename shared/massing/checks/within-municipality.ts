@@ -5,8 +5,8 @@ import type { MassingIssue } from '../massing-issue.ts';
 import { findPositionOutside, type MassingCheck, type MassingSite } from '../massing-scene.ts';
 
 /** Every block lies within the municipality; one that would, were its coordinates turned round, is told so. */
-export const checkWithinMunicipality: MassingCheck = ({ footprints, site }) =>
-  footprints.flatMap(({ block }) => checkBlock(block, site.extent) ?? []);
+export const checkWithinMunicipality: MassingCheck = ({ blocks, site }) =>
+  blocks.flatMap((block) => checkBlock(block, site.extent) ?? []);
 
 function checkBlock(block: MassingBlock, extent: MassingSite['extent']): MassingIssue | null {
   const outside = findPositionOutside(block, extent);

@@ -85,6 +85,10 @@ describe('the heights of a block', () => {
     expect(codesOf(read({ base: 0, height: 45 }).issues)).toEqual([]);
   });
 
+  it('take −0 for 0', () => {
+    expect(read({ base: -0, top: 9 }).properties?.baseM).toBe(0);
+  });
+
   it('are not guessed from storeys', () => {
     const { properties, issues } = read({ base: 0, levels: 14 });
     expect(properties).toBeNull();
