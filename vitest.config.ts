@@ -26,6 +26,7 @@ export default defineConfig({
           name: 'unit',
           include: [testFiles],
           exclude: [longFiles, referenceFiles, browserFiles, clientFiles, ...databaseFiles],
+          setupFiles: 'test/support/repeatable-properties.ts',
           testTimeout: 30_000,
         },
       },

@@ -98,16 +98,31 @@ function areaOf(polygons: [number, number][][][]): number {
   return areaM2;
 }
 
+/** polyclip-ts throws on about one pair in a thousand; fast-check draws another in its place. */
+function clipOrNull(a: Ring, b: Ring) {
+  try {
+    return {
+      union: areaOf(union([a], [b])),
+      intersection: areaOf(intersection([a], [b])),
+      xor: areaOf(xor([a], [b])),
+    };
+  } catch {
+    return null;
+  }
+}
+
 describe('the sweep beside an independent clipping', () => {
   it('gives the same areas of union, intersection and symmetric difference', () => {
     fc.assert(
       fc.property(ringArbitrary, ringArbitrary, (a, b) => {
         const layers = [[orientRing(a, 'outer')], [orientRing(b, 'outer')]];
         const xorOf = ([inA, inB]: readonly number[]) => (inA !== 0) !== (inB !== 0);
+        const clipped = clipOrNull(a, b);
+        fc.pre(clipped !== null);
         // polyclip-ts snaps to about 1e-9 of the coordinates.
-        expect(measureWhere(layers, inAny)?.areaM2).toBeCloseTo(areaOf(union([a], [b])), 5);
-        expect(measureWhere(layers, inAll)?.areaM2).toBeCloseTo(areaOf(intersection([a], [b])), 5);
-        expect(measureWhere(layers, xorOf)?.areaM2).toBeCloseTo(areaOf(xor([a], [b])), 5);
+        expect(measureWhere(layers, inAny)?.areaM2).toBeCloseTo(clipped.union, 5);
+        expect(measureWhere(layers, inAll)?.areaM2).toBeCloseTo(clipped.intersection, 5);
+        expect(measureWhere(layers, xorOf)?.areaM2).toBeCloseTo(clipped.xor, 5);
       }),
       { numRuns: 300 },
     );
