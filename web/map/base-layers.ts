@@ -1,4 +1,5 @@
 import type { LayerSpecification } from 'maplibre-gl';
+import type { TileLayer } from '../../shared/contracts/base-data.ts';
 import { mapPalette as colour } from './map-palette.ts';
 
 export const mapFont = ['Public Sans'];
@@ -85,12 +86,20 @@ export const lotLayers: LayerSpecification[] = [
   },
 ];
 
+/** The areas that carry names. */
+export const namedTiles = ['parcels', 'open-space', 'water'] as const satisfies TileLayer[];
+
+/** The source from which an area's names are taken; see map-style.ts. */
+export function namesOf(layer: (typeof namedTiles)[number]): string {
+  return `${layer}-names`;
+}
+
 /** House numbers and names; they lie over everything that the case draws. */
 export const nameLayers: LayerSpecification[] = [
   {
     id: 'house-numbers',
     type: 'symbol',
-    source: 'parcels',
+    source: namesOf('parcels'),
     'source-layer': 'parcels',
     minzoom: 16.8,
     layout: {
@@ -104,7 +113,7 @@ export const nameLayers: LayerSpecification[] = [
   {
     id: 'open-space-names',
     type: 'symbol',
-    source: 'open-space',
+    source: namesOf('open-space'),
     'source-layer': 'open-space',
     minzoom: 14.5,
     layout: { 'text-field': ['get', 'name'], 'text-font': mapFont, 'text-size': 12 },
@@ -113,7 +122,7 @@ export const nameLayers: LayerSpecification[] = [
   {
     id: 'water-names',
     type: 'symbol',
-    source: 'water',
+    source: namesOf('water'),
     'source-layer': 'water',
     layout: {
       'text-field': ['get', 'name'],

@@ -10,6 +10,7 @@ import {
   blockFeatures,
   blockLabelFeatures,
   collect,
+  middleOf,
   notMetFeatures,
   pinFeatures,
   receptorFeatures,
@@ -58,6 +59,8 @@ export default function MapCanvas(props: MapCanvasProps) {
       style: buildMapStyle(`${window.location.origin}/api/tiles/{layer}/{z}/{x}/{y}.mvt`),
       minZoom: 11,
       maxZoom: 21,
+      // A closer view stretches the largest tile as a whole; cut up, each piece would carry its names.
+      zoomLevelsToOverscale: 10,
       // A plan is seen from above with north up.
       dragRotate: false,
       pitchWithRotate: false,
@@ -124,6 +127,7 @@ export default function MapCanvas(props: MapCanvasProps) {
   }, [map, label, mode]);
 
   useMapContents(map, props);
+  useChosenInView(map, props);
 
   const zoomBy = (steps: number) => map?.zoomTo(map.getZoom() + steps, {}, byPerson);
   const isPickable = onPick !== undefined;
@@ -237,6 +241,20 @@ function useMapContents(map: maplibregl.Map | null, props: CaseMapProps): void {
       map?.setFilter(id, filter);
     }
   }, [map, chosenReceptor, pickedParcels]);
+}
+
+/** Brings a chosen receptor that lies outside the view into its middle. */
+function useChosenInView(map: maplibregl.Map | null, props: CaseMapProps): void {
+  const { chosenReceptor = null, receptors = none } = props;
+  const reveal = useEffectEvent((moved: maplibregl.Map, id: string) => {
+    const chosen = receptors.find((receptor) => receptor.id === id);
+    if (chosen === undefined) return;
+    const middle = middleOf(chosen.geometry);
+    if (!moved.getBounds().contains(middle)) moved.easeTo({ center: middle }, byPerson);
+  });
+  useEffect(() => {
+    if (map !== null && chosenReceptor !== null) reveal(map, chosenReceptor);
+  }, [map, chosenReceptor]);
 }
 
 /** One empty array for all, so that an absent prop is no change. */

@@ -1,6 +1,6 @@
 import type { SourceSpecification, StyleSpecification } from 'maplibre-gl';
 import { type TileLayer } from '../../shared/contracts/base-data.ts';
-import { groundLayers, lotLayers, nameLayers } from './base-layers.ts';
+import { groundLayers, lotLayers, namedTiles, nameLayers, namesOf } from './base-layers.ts';
 import {
   markLayers,
   overlaySources,
@@ -18,18 +18,22 @@ const baseTiles: readonly TileLayer[] = [
   'buildings',
 ];
 
+/** A tile of zoom 16 resolves 0.1 m here; closer views stretch it. */
+const deepestTileZoom = 16;
+/** An area that is cut by a tile's edge would be named in each part: names come from large tiles. */
+const nameTileZoom = 13;
+
 /**
  * The whole drawing: the base from the municipality's own tiles, everything else from the page.
  *
  * @param tilesUrl absolute, with `{layer}` in it; MapLibre fills in z, x and y
  */
 export function buildMapStyle(tilesUrl: string): StyleSpecification {
-  const tileSource = (layer: TileLayer): SourceSpecification => ({
+  const tileSource = (layer: TileLayer, maxzoom: number): SourceSpecification => ({
     type: 'vector',
     tiles: [tilesUrl.replace('{layer}', layer)],
     minzoom: 10,
-    // A tile of zoom 16 resolves 0.1 m here; closer views stretch it.
-    maxzoom: 16,
+    maxzoom,
   });
   const empty: SourceSpecification = {
     type: 'geojson',
@@ -40,7 +44,10 @@ export function buildMapStyle(tilesUrl: string): StyleSpecification {
   return {
     version: 8,
     sources: {
-      ...Object.fromEntries(baseTiles.map((layer) => [layer, tileSource(layer)])),
+      ...Object.fromEntries(baseTiles.map((layer) => [layer, tileSource(layer, deepestTileZoom)])),
+      ...Object.fromEntries(
+        namedTiles.map((layer) => [namesOf(layer), tileSource(layer, nameTileZoom)]),
+      ),
       ...Object.fromEntries(overlaySources.map((source) => [source, empty])),
     },
     layers: [

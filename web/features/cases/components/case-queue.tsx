@@ -39,7 +39,7 @@ function queueColumns(formats: Formats, nowMs: number): TableColumn<CaseSummary>
       header: 'Case',
       sortKey: 'number',
       isRowHeader: true,
-      className: 'min-w-52',
+      className: 'min-w-40 sm:min-w-52',
       cell: (row) => (
         <>
           <Link to={paths.deskCase.href(row.reference)} className="link font-strong">
@@ -54,7 +54,7 @@ function queueColumns(formats: Formats, nowMs: number): TableColumn<CaseSummary>
     {
       id: 'proposal',
       header: 'Proposal',
-      className: 'min-w-36',
+      className: 'hidden min-w-36 md:table-cell',
       cell: (row) => (
         <>
           {describeProposal(row, formats)}

@@ -4,10 +4,8 @@ import type {
   StudyDetail,
   FindingRow,
 } from '../../../../shared/contracts/studies.ts';
-import { drawPlan, emptyPlan } from '../../../../shared/drawing/plan-drawing.ts';
-import { titleBlockRows, type TitleBlock } from '../../../../shared/drawing/title-block.ts';
+import type { TitleBlock } from '../../../../shared/drawing/title-block.ts';
 import type { LngLat, Polygonal } from '../../../../shared/geometry/geojson-schema.ts';
-import { SvgDrawing } from '../../../components/svg-drawing.tsx';
 import { usePlace } from '../../../lib/place-context.ts';
 import { useCameraInUrl } from '../../../map/camera-in-url.ts';
 import type { ShadowLayer } from '../../../map/case-layers.ts';
@@ -16,6 +14,7 @@ import { boundsAround, type Bounds, type MapPin } from '../../../map/map-feature
 import { MapTitleBlock } from '../../../map/map-title-block.tsx';
 import type { DrawnEvidence } from '../api/get-study-evidence.ts';
 import { mapBlocksOf, mapReceptorsOf } from '../map-contents.ts';
+import { StudyPlan } from './study-plan.tsx';
 
 export interface StudyMapProps {
   study: StudyDetail;
@@ -31,7 +30,6 @@ export interface StudyMapProps {
 }
 
 const marginM = 40;
-const fallbackWidth = 760;
 
 /** The study on the map: the site, the shadows of the instant, who is judged and who is chosen. */
 export function StudyMap(props: StudyMapProps) {
@@ -70,51 +68,10 @@ export function StudyMap(props: StudyMapProps) {
         if (receptor !== null) onChoose(receptor, lngLat);
       }}
       titleBlock={<MapTitleBlock block={titleBlock} />}
-      fallback={<StudyPlan {...props} bounds={bounds} titleBlock={titleBlock} />}
+      fallback={
+        <StudyPlan {...{ site, evidence, rows, shadows, layer, chosen, bounds, titleBlock }} />
+      }
       className="h-[26rem] lg:h-[clamp(24rem,100vh-30rem,44rem)]"
     />
   );
-}
-
-type StudyPlanProps = StudyMapProps & { bounds: Bounds; titleBlock: TitleBlock };
-
-/** The same as a drawing that every browser shows. */
-function StudyPlan({ site, evidence, rows, shadows, chosen, bounds, titleBlock }: StudyPlanProps) {
-  const { municipality, formats } = usePlace();
-  const { longitude, latitude } = municipality;
-  const markup = useMemo(() => {
-    const receptors = mapReceptorsOf(evidence, rows);
-    const footprints = (role: string) =>
-      evidence.blocks.features
-        .filter(({ properties }) => properties.role === role)
-        .map(({ geometry }) => geometry);
-    const shadowOf = (kind: string) =>
-      shadows?.features.find(({ properties }) => properties.kind === kind)?.geometry;
-    const [standing, netNew] = [shadowOf('before'), shadowOf('netNew')];
-    return drawPlan(
-      {
-        ...emptyPlan,
-        parcels: receptors.filter((one) => one.class === 'parcel').map((one) => one.geometry),
-        buildings: footprints('context'),
-        site: site === null ? [] : [site],
-        removed: footprints('existing'),
-        proposal: mapBlocksOf(evidence).filter(({ role }) => role === 'proposed'),
-        shadows: standing === undefined || netNew === undefined ? null : { standing, netNew },
-        chosen: receptors.find(({ id }) => id === chosen)?.geometry ?? null,
-        notMet: receptors
-          .filter(({ finding }) => finding === 'not-met')
-          .map(({ geometry }) => ({ geometry, mark: '✕' })),
-      },
-      {
-        origin: { longitude, latitude },
-        extent: bounds,
-        width: fallbackWidth,
-        label: 'Plan of the study: the site, the shadows of the chosen time, and the receptors',
-        figures: formats.figure,
-        detail: 'sheet',
-        titleBlock: titleBlockRows(titleBlock, formats.civil, formats.figure),
-      },
-    );
-  }, [site, evidence, rows, shadows, chosen, bounds, titleBlock, longitude, latitude, formats]);
-  return <SvgDrawing markup={markup} />;
 }

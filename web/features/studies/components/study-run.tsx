@@ -26,7 +26,7 @@ export function StudyRun({ study, canCancel }: StudyRunProps) {
     <section className="measure grid gap-3" aria-label="Study under way">
       <h2>The study of revision {study.revision} is under way</h2>
       <progress
-        className="study-progress h-3 w-full"
+        className="h-3 w-full appearance-none border border-ink bg-sheet [&::-moz-progress-bar]:bg-ink [&::-webkit-progress-bar]:bg-sheet [&::-webkit-progress-value]:bg-ink"
         aria-label="Instants computed"
         max={Math.max(1, instantsTotal)}
         value={instantsDone}
