@@ -25,6 +25,7 @@ export function mountWebClient(app: Express, distFolder: string): void {
   // Every other path is a page of the client, which reads it by itself.
   app.get('/{*any}', (_request, response) => {
     response.set('Cache-Control', 'no-cache');
-    response.sendFile(path.join(distFolder, 'index.html'));
+    // With a root of its own, so that a dot folder above the client hides nothing.
+    response.sendFile('index.html', { root: distFolder });
   });
 }
