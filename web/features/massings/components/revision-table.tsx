@@ -17,7 +17,7 @@ export function RevisionTable({ reference, revisions, shown, onShow }: RevisionT
   const formats = useFormats();
   return (
     <DataTable
-      caption="Massing revisions"
+      caption="Stored massing revisions"
       hideCaption
       columns={revisionColumns(reference, formats, onShow)}
       rows={revisions}
