@@ -26,13 +26,14 @@ async function countMadder(page: Page): Promise<{ north: number; south: number }
     if (context === null) throw new Error('no canvas');
     context.drawImage(image, 0, 0);
     const { data } = context.getImageData(0, 0, image.width, image.height);
-    const half = Math.floor(image.height / 2);
+    // The site stands a little below the middle: the lowest third lies south of the tower.
+    const southFrom = Math.floor((image.height * 2) / 3);
     const counted = { north: 0, south: 0 };
     for (let index = 0; index < data.length; index += 4) {
       const [red = 0, green = 0, blue = 0] = data.subarray(index, index + 3);
       if (red > 130 && green < 110 && blue < 120 && red - green > 60) {
         const row = Math.floor(index / 4 / image.width);
-        counted[row < half ? 'north' : 'south'] += 1;
+        counted[row < southFrom ? 'north' : 'south'] += 1;
       }
     }
     return counted;
@@ -70,7 +71,7 @@ describe('the map of a study', () => {
     const before = await show('before');
     const after = await show('after');
     expect(after.north - before.north).toBeGreaterThan(600);
-    expect(Math.abs(after.south - before.south)).toBeLessThan((after.north - before.north) / 5);
+    expect(Math.abs(after.south - before.south)).toBeLessThan((after.north - before.north) / 20);
     await leave();
   });
 });

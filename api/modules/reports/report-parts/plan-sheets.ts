@@ -52,10 +52,12 @@ export function pointsToAMetre({ origin, payload }: ReportScene, planWidth: numb
   return planWidth / (extent.eastM - extent.westM);
 }
 
-/** A title block by itself. */
-export function drawTitle(scene: ReportScene, instant: ReportInstant): string {
+/** A title block by itself, in smaller letters where it would be wider than its column. */
+export function drawTitle(scene: ReportScene, instant: ReportInstant, columnWidth: number): string {
   const rows = titleRows(scene, instant);
-  const fontSize = 7.5;
+  const largest = 7.5;
+  const fit = (columnWidth - 1) / measureTitleBlock(rows, largest).width;
+  const fontSize = largest * Math.min(1, fit);
   const { width, height } = measureTitleBlock(rows, fontSize);
   return svgDocument({ width: width + 1, height: height + 1 }, rows.flat().join(', '), [
     drawTitleBlock(rows, [0.5, 0.5], fontSize),

@@ -223,7 +223,10 @@ function worstHour(scene: ReportScene): Content[] {
             label(
               `${isJudged(scene.payload, worst.at) ? 'The judged hour' : 'The hour'} with the most net new shadow`,
             ),
-            { svg: drawTitle(scene, worst), margin: [0, 4, 0, 6] },
+            {
+              svg: drawTitle(scene, worst, page.textWidth - width - 12),
+              margin: [0, 4, 0, 6],
+            },
             { svg: drawNorthAndScale(scene, width), margin: [0, 0, 0, 6] },
             {
               text: `${figures.area(worst.netNewM2)} of ground in shadow that has sun now: hatched. Plain: shadow that is there already.${scene.notMet.length === 0 ? '' : ' The numbers are those of the list above.'} Every hour of every key date follows further on.`,
