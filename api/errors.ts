@@ -16,6 +16,7 @@ const defaultTitles = {
   MASSING_UNREADABLE: 'The massing file could not be read.',
   MASSING_UNSOUND: 'The massing has errors. Correct them and upload it again.',
   MASSING_MISSING: 'Upload a massing first.',
+  MUNICIPALITY_SET_UP: 'The municipality is set up already.',
   RULE_MISSING: 'No rule is in force today. Put one in force first.',
   STUDY_RUNNING: 'A study of this revision is already under way.',
   STUDY_MISSING: 'Run a study first.',

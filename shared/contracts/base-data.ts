@@ -18,6 +18,42 @@ export const municipalitySchema = z.object({
 });
 export type Municipality = z.infer<typeof municipalitySchema>;
 
+/** The first administrator's answers where nothing is set up yet. */
+export const setUpMunicipalityInputSchema = z
+  .strictObject({
+    name: z.string().trim().min(1, 'Write the name, for example City of Larkhaven.').max(120),
+    shortName: z.string().trim().min(1, 'Write the short name.').max(40),
+    timeZone: z.string().refine(isTimeZone, 'Write an IANA zone, for example America/Chicago.'),
+    locale: z.string().refine(isLocale, 'Write a language tag, for example en-US.'),
+    longitude: z.number('Write a number of degrees.').min(-180).max(180),
+    latitude: z.number('Write a number of degrees.').min(-89).max(89),
+    elevationM: z.number('Write a number of metres.').min(-450).max(9000),
+    extent: municipalitySchema.shape.extent,
+    studyYear: z.int('Write a year.').min(1900).max(2100),
+  })
+  .refine(({ extent: [west, south, east, north] }) => west < east && south < north, {
+    path: ['extent'],
+    error: 'West must be less than east, and south less than north.',
+  });
+export type SetUpMunicipalityInput = z.infer<typeof setUpMunicipalityInputSchema>;
+
+function isTimeZone(name: string): boolean {
+  try {
+    new Intl.DateTimeFormat('en', { timeZone: name });
+    return true;
+  } catch {
+    return false;
+  }
+}
+
+function isLocale(tag: string): boolean {
+  try {
+    return Intl.DateTimeFormat.supportedLocalesOf(tag).length === 1;
+  } catch {
+    return false;
+  }
+}
+
 export const parcelSchema = z.object({
   number: z.string(),
   address: z.string(),

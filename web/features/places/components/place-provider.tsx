@@ -1,13 +1,21 @@
 import { useMemo, type ReactNode } from 'react';
 import type { Municipality } from '../../../../shared/contracts/base-data.ts';
 import { QueryView } from '../../../components/query-view.tsx';
+import { isApiError } from '../../../lib/api-error.ts';
 import { createFormats } from '../../../lib/formats.ts';
 import { PlaceContext } from '../../../lib/place-context.ts';
 import { useMunicipality } from '../api/get-municipality.ts';
 
+export interface PlaceProviderProps {
+  children: ReactNode;
+  /** What is shown where no place was ever set up. */
+  whenNotSetUp: ReactNode;
+}
+
 /** Loads the place once; pages below may rely on it and on its formats. */
-export function PlaceProvider({ children }: { children: ReactNode }) {
+export function PlaceProvider({ children, whenNotSetUp }: PlaceProviderProps) {
   const municipality = useMunicipality();
+  if (isApiError(municipality.error, 'UNAVAILABLE')) return whenNotSetUp;
   if (municipality.data !== undefined) {
     return <LoadedPlace municipality={municipality.data}>{children}</LoadedPlace>;
   }

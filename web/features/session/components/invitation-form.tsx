@@ -16,7 +16,7 @@ export function InvitationForm({ token, onAccepted }: InvitationFormProps) {
   const acceptInvitation = useAcceptInvitation();
   const { control, handleSubmit } = useForm({
     resolver: zodResolver(acceptInvitationInputSchema.omit({ token: true })),
-    defaultValues: { name: '', password: '' },
+    defaultValues: { name: '', email: '', password: '' },
   });
   const send = handleSubmit((input) => {
     acceptInvitation.mutate(
@@ -31,6 +31,14 @@ export function InvitationForm({ token, onAccepted }: InvitationFormProps) {
   return (
     <form noValidate className="grid max-w-sm gap-4" onSubmit={(event) => void send(event)}>
       <FormTextField control={control} name="name" label="Your name" autoComplete="name" />
+      <FormTextField
+        control={control}
+        name="email"
+        type="email"
+        label="Your e-mail address"
+        description="You sign in with it."
+        autoComplete="username"
+      />
       <FormTextField
         control={control}
         name="password"
