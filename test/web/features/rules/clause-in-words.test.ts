@@ -29,7 +29,9 @@ describe('a clause in words', () => {
     expect(words['Judged']).toContain('parcels and open spaces');
     expect(words['Days']).toBe('the winter solstice');
     expect(words['Hours']).toBe('from 10:00 to 14:00, standard time, all year, every 10 minutes');
-    expect(words['Asked']).toBe('at least 2 h 00 min with the proposal or loses at most 30 min');
+    expect(words['Asked']).toBe(
+      'at least 2 h 00 min with the proposal, or a loss of at most 30 min',
+    );
   });
 
   it('writes shares as percentages where the measure is a share', () => {
@@ -43,7 +45,7 @@ describe('a clause in words', () => {
   it('says which measure a limit takes where it is not the clause’s own', () => {
     const words = wordsOf({ limit: { keeps: 0.8, measure: { kind: 'beam-energy' } } });
     expect(words['Asked']).toBe(
-      'at least 80% of what it is now (direct clear-sky energy, added over the days)',
+      'at least 80% of what there is now (of direct clear-sky energy on the area, added over the judged days)',
     );
   });
 
