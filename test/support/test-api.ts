@@ -1,6 +1,7 @@
 import type { MikroORM } from '@mikro-orm/postgresql';
 import type { Express } from 'express';
 import { pino } from 'pino';
+import type { Logger } from 'pino';
 import supertest from 'supertest';
 import { createApp } from '../../api/app.ts';
 import { loadClipper } from '../../api/clipper.ts';
@@ -50,8 +51,14 @@ export interface TestApi {
 
 const password = 'a password of tests';
 
-/** The application on a database of its own, without a socket and without a worker. */
-export async function startTestApi(): Promise<TestApi> {
+/**
+ * The application on a database of its own, without a socket and without a worker; with other
+ * settings or a log that is read, where a test is about them.
+ */
+export async function startTestApi({
+  variables = {},
+  logger = pino({ level: 'silent' }),
+}: { variables?: NodeJS.ProcessEnv; logger?: Logger } = {}): Promise<TestApi> {
   const database = await createTestDatabase();
   const env = parseEnv({
     NODE_ENV: 'test',
@@ -59,12 +66,12 @@ export async function startTestApi(): Promise<TestApi> {
     SESSION_SECRET: 'a secret of tests, long enough to be one',
     PUBLIC_URL: 'http://127.0.0.1:8080',
     TRUSTED_PROXIES: '1',
+    ...variables,
   });
   const orm = await createOrm(database.appUrl);
   const queue = createJobQueue(database.appUrl, { supervise: false });
   await queue.start();
   const sessionStore = createSessionStore(database.appUrl);
-  const logger = pino({ level: 'silent' });
   const deps = { orm, env, queue, clipper: await loadClipper(), logger, sessionStore };
   const app = createApp(deps);
   await createPeople(orm);
