@@ -1,3 +1,4 @@
+import { raw } from '@mikro-orm/core';
 import type { EntityManager } from '@mikro-orm/postgresql';
 import type { Point } from 'geojson';
 import { z } from 'zod';
@@ -52,6 +53,11 @@ export async function renderTile(
     [z, x, y, z, x, y, tileBuffer / tileExtent, tileExtent, tileBuffer, layer, tileExtent],
   );
   return row?.tile ?? Buffer.alloc(0);
+}
+
+/** A condition on any layer of base data: what touches west, south, east, north. It serves one query. */
+export function touchingExtent(extent: readonly [number, number, number, number]) {
+  return { [raw('geometry && ST_MakeEnvelope(?, ?, ?, ?, 4326)', [...extent])]: [] };
 }
 
 /** The area of these parcels as one shape, and a point inside it; null where none of them is known. */

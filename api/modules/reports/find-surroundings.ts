@@ -1,8 +1,8 @@
-import { raw } from '@mikro-orm/core';
 import type { EntityManager } from '@mikro-orm/postgresql';
 import { Building } from '../base-data/building.entity.ts';
 import { OpenSpace } from '../base-data/open-space.entity.ts';
 import { Parcel } from '../base-data/parcel.entity.ts';
+import { touchingExtent } from '../base-data/spatial-queries.ts';
 import { StreetLine } from '../base-data/street-line.entity.ts';
 import { Street } from '../base-data/street.entity.ts';
 import { Water } from '../base-data/water.entity.ts';
@@ -14,10 +14,7 @@ export async function findSurroundings(
   em: EntityManager,
   extent: ReportPayload['mapExtent'],
 ): Promise<ReportPayload['surroundings']> {
-  // A raw condition serves one query.
-  const touches = () => ({
-    [raw('geometry && ST_MakeEnvelope(?, ?, ?, ?, 4326)', [...extent])]: [],
-  });
+  const touches = () => touchingExtent(extent);
   const byName = { orderBy: { name: 'asc', id: 'asc' } } as const;
   return reportPayloadSchema.shape.surroundings.parse({
     buildings: await em.find(Building, touches(), { orderBy: { id: 'asc' } }),

@@ -8,8 +8,12 @@ import { listJudgedDays } from '../../../shared/study/judged-days.ts';
 import { listKeyDateInstants } from '../../../shared/study/key-date-instants.ts';
 import { readStudyInput } from '../../../shared/study/read-study-input.ts';
 import type { InputIssue } from '../../../shared/study/read-study-input.ts';
+import {
+  findExtremeHeights,
+  listBuildingBlocks,
+  listReceptors,
+} from '../base-data/site-surroundings-queries.ts';
 import type { Municipality } from '../settings/municipality.entity.ts';
-import { findExtremeHeights, listBuildingBlocks, listReceptors } from './find-site-surroundings.ts';
 import { placeOf } from './study-place.ts';
 import { computeStudyReach } from './study-reach.ts';
 

@@ -3,6 +3,7 @@ import type { EntityManager } from '@mikro-orm/postgresql';
 import type { Response } from 'express';
 import { studyProgressSchema } from '../../../shared/contracts/studies.ts';
 import type { StudyProgress } from '../../../shared/contracts/studies.ts';
+import { Study } from './study.entity.ts';
 
 const pollEveryMs = 300;
 /** Proxies cut a line that is silent for long. */
@@ -46,10 +47,10 @@ export async function streamStudyProgress(
 }
 
 async function findProgress(em: EntityManager, studyId: string): Promise<StudyProgress> {
-  const [row] = await em.execute<unknown[]>(
-    `select status, instants_done as "instantsDone", instants_total as "instantsTotal"
-     from study where id = ?`,
-    [studyId],
-  );
-  return studyProgressSchema.parse(row);
+  const study = await em.findOneOrFail(Study, studyId, {
+    fields: ['status', 'instantsDone', 'instantsTotal'],
+    // The row changes while it is watched.
+    disableIdentityMap: true,
+  });
+  return studyProgressSchema.parse(study);
 }

@@ -1,8 +1,10 @@
 import { randomUUID } from 'node:crypto';
+import { LockMode, raw } from '@mikro-orm/core';
 import type { EntityManager } from '@mikro-orm/postgresql';
 import type PgBoss from 'pg-boss';
 import { enqueueJob } from '../../jobs/enqueue-job.ts';
 import { runStudyJob } from '../../jobs/job-definitions.ts';
+import { Study } from './study.entity.ts';
 
 /** A run that shows no life for so long is taken for dead, and its study is given to another. */
 export const studyLeaseMs = 15_000;
@@ -21,15 +23,21 @@ export interface StudyRun {
  */
 export async function claimStudy(em: EntityManager, studyId: string): Promise<StudyRun | null> {
   const claim = randomUUID();
-  const claimed = await em.execute<unknown[]>(
-    `update study set status = 'running', claim = ?, heartbeat_at = now(), attempts = attempts + 1,
-       instants_done = 0
-     where id = ?
-       and (status = 'queued' or (status = 'running' and heartbeat_at < now() - ? * interval '1 ms'))
-     returning id`,
-    [claim, studyId, studyLeaseMs],
+  const claimed = await em.nativeUpdate(
+    Study,
+    {
+      id: studyId,
+      $or: [{ status: 'queued' }, { status: 'running', heartbeatAt: { $lt: ago(studyLeaseMs) } }],
+    },
+    {
+      status: 'running',
+      claim,
+      heartbeatAt: raw('now()'),
+      attempts: raw('attempts + 1'),
+      instantsDone: 0,
+    },
   );
-  return claimed.length === 1 ? { studyId, claim } : null;
+  return claimed === 1 ? { studyId, claim } : null;
 }
 
 /** Writes how far the run is and that it lives; false where the study is no longer this run's. */
@@ -39,12 +47,12 @@ export async function reportProgress(
   instantsDone: number,
   instantsTotal: number,
 ): Promise<boolean> {
-  const held = await em.execute<unknown[]>(
-    `update study set instants_done = ?, instants_total = ?, heartbeat_at = now()
-     where id = ? and claim = ? and status = 'running' returning id`,
-    [instantsDone, instantsTotal, studyId, claim],
-  );
-  return held.length === 1;
+  const held = await em.nativeUpdate(Study, stillHeld(studyId, claim), {
+    instantsDone,
+    instantsTotal,
+    heartbeatAt: raw('now()'),
+  });
+  return held === 1;
 }
 
 /** Ends the run without a result; `failure` is a sentence. */
@@ -53,11 +61,12 @@ export async function failStudy(
   { studyId, claim }: StudyRun,
   failure: string,
 ): Promise<void> {
-  await em.execute(
-    `update study set status = 'failed', claim = null, failure = ?, finished_at = now()
-     where id = ? and claim = ? and status = 'running'`,
-    [failure, studyId, claim],
-  );
+  await em.nativeUpdate(Study, stillHeld(studyId, claim), {
+    status: 'failed',
+    claim: null,
+    failure,
+    finishedAt: raw('now()'),
+  });
 }
 
 /** Gives the study back to the queue, because this worker stops. */
@@ -67,12 +76,12 @@ export async function handBackStudy(
   { studyId, claim }: StudyRun,
 ): Promise<void> {
   await em.transactional(async (tx) => {
-    const held = await tx.execute<unknown[]>(
-      `update study set status = 'queued', claim = null, attempts = attempts - 1
-       where id = ? and claim = ? and status = 'running' returning id`,
-      [studyId, claim],
-    );
-    if (held.length === 1) await enqueueJob(tx, queue, runStudyJob, { version: 1, studyId });
+    const held = await tx.nativeUpdate(Study, stillHeld(studyId, claim), {
+      status: 'queued',
+      claim: null,
+      attempts: raw('attempts - 1'),
+    });
+    if (held === 1) await enqueueJob(tx, queue, runStudyJob, { version: 1, studyId });
   });
 }
 
@@ -83,26 +92,32 @@ export async function requeueDeadStudies(
   leaseMs = studyLeaseMs,
 ): Promise<number> {
   return em.transactional(async (tx) => {
-    const dead = await tx.execute<{ id: string; status: string }[]>(
-      `update study set claim = null,
-         status = case when attempts < ? then 'queued' else 'failed' end,
-         finished_at = case when attempts < ? then null else now() end,
-         failure = case when attempts < ? then null else ? end
-       where status = 'running' and heartbeat_at < now() - ? * interval '1 ms'
-       returning id, status`,
-      [
-        mostAttempts,
-        mostAttempts,
-        mostAttempts,
-        `The computation broke off ${mostAttempts} times without a result. Tell the operator: the worker's log says more.`,
-        leaseMs,
-      ],
+    const dead = await tx.find(
+      Study,
+      { status: 'running', heartbeatAt: { $lt: ago(leaseMs) } },
+      { lockMode: LockMode.PESSIMISTIC_PARTIAL_WRITE },
     );
-    for (const { id, status } of dead) {
-      if (status === 'queued') {
-        await enqueueJob(tx, queue, runStudyJob, { version: 1, studyId: id });
+    for (const study of dead) {
+      study.claim = null;
+      if (study.attempts < mostAttempts) {
+        study.status = 'queued';
+        await enqueueJob(tx, queue, runStudyJob, { version: 1, studyId: study.id });
+      } else {
+        study.status = 'failed';
+        study.finishedAt = new Date();
+        study.failure = `The computation broke off ${mostAttempts} times without a result. Tell the operator: the worker's log says more.`;
       }
     }
     return dead.length;
   });
+}
+
+/** The study as long as it is this run's. */
+function stillHeld(id: string, claim: string) {
+  return { id, claim, status: 'running' } as const;
+}
+
+/** By the database's clock, which all workers share. */
+function ago(milliseconds: number): Date {
+  return raw<Study, Date>("now() - ? * interval '1 ms'", [milliseconds]);
 }

@@ -3,7 +3,7 @@ import type { Polygonal } from '../../../shared/geometry/geojson-schema.ts';
 import type { MassingBlock } from '../../../shared/massing/massing-block.ts';
 import type { ReceptorClass } from '../../../shared/rules/rule-schema.ts';
 import type { EvidenceBlock, EvidenceReceptor } from '../../../shared/study/evidence-schema.ts';
-import type { StudyReach } from './study-reach.ts';
+import type { StudyReach } from '../studies/study-reach.ts';
 
 /** A building stands on the site when more than this share of its footprint lies in the site's parcels. */
 const shareOnSite = 0.5;
