@@ -14,14 +14,20 @@ export const parcelNumbersSchema = z
   .min(1, 'Pick at least one site parcel.')
   .max(50);
 
-export const createCaseInputSchema = z.strictObject({
+const applicationFields = {
   title: z.string().trim().min(3, 'Give the project a name.').max(120),
-  description: z.string().trim().max(4000).default(''),
+  description: z.string().trim().max(4000),
   siteParcels: parcelNumbersSchema,
+};
+
+export const createCaseInputSchema = z.strictObject({
+  ...applicationFields,
+  description: applicationFields.description.default(''),
 });
 export type CreateCaseInput = z.input<typeof createCaseInputSchema>;
 
-export const updateCaseInputSchema = createCaseInputSchema.partial();
+/** Without defaults: a field that is left out stays as it is. */
+export const updateCaseInputSchema = z.strictObject(applicationFields).partial();
 export type UpdateCaseInput = z.input<typeof updateCaseInputSchema>;
 
 export const transitionInputSchema = z.strictObject({

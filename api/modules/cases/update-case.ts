@@ -20,7 +20,8 @@ export async function updateCase(
     if (title !== undefined) reviewCase.title = title;
     if (description !== undefined) reviewCase.description = description;
     if (siteParcels !== undefined && isOtherSite(reviewCase.siteParcels, siteParcels)) {
-      tx.assign(reviewCase, { ...(await pickSite(tx, siteParcels)), siteSince: new Date() });
+      Object.assign(reviewCase, await pickSite(tx, siteParcels));
+      reviewCase.siteSince = new Date();
     }
     return reviewCase;
   });
