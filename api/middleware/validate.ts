@@ -14,6 +14,11 @@ interface CheckedInput {
   body: unknown;
 }
 
+interface InputError {
+  path: string;
+  message: string;
+}
+
 /**
  * The input of a request, checked and converted. Throws INPUT_INVALID with every issue of query and
  * body, or NOT_FOUND where the path itself can name nothing.
@@ -24,16 +29,17 @@ export function validate(schemas: RequestSchemas, request: Request): CheckedInpu
   const query = schemas.query?.safeParse(request.query);
   // Express leaves the body undefined when none was sent; a schema then names what is missing.
   const body = schemas.body?.safeParse(request.body ?? {});
+  if (listUnstorableTexts(params?.data).length > 0) throw new AppError('NOT_FOUND');
   const issues = [...(query?.error?.issues ?? []), ...(body?.error?.issues ?? [])];
-  if (issues.length > 0) {
-    throw new AppError('INPUT_INVALID', {
-      errors: issues.flatMap(describeIssue),
-    });
-  }
+  const errors = [
+    ...issues.flatMap(describeIssue),
+    ...[query?.data, body?.data].flatMap((data) => listUnstorableTexts(data)),
+  ];
+  if (errors.length > 0) throw new AppError('INPUT_INVALID', { errors });
   return { params: params?.data, query: query?.data, body: body?.data };
 }
 
-function describeIssue(issue: z.core.$ZodIssue): { path: string; message: string }[] {
+function describeIssue(issue: z.core.$ZodIssue): InputError[] {
   // An unknown member is named by its own path, not by that of the object around it.
   if (issue.code === 'unrecognized_keys') {
     return issue.keys.map((key) => ({
@@ -42,4 +48,15 @@ function describeIssue(issue: z.core.$ZodIssue): { path: string; message: string
     }));
   }
   return [{ path: issue.path.join('.'), message: issue.message }];
+}
+
+/** Texts with a zero character or half a surrogate pair: PostgreSQL keeps neither. */
+function listUnstorableTexts(value: unknown, path: readonly string[] = []): InputError[] {
+  if (typeof value === 'string') {
+    return /\0|\p{Surrogate}/u.test(value)
+      ? [{ path: path.join('.'), message: 'This text has a character that cannot be kept.' }]
+      : [];
+  }
+  if (typeof value !== 'object' || value === null) return [];
+  return Object.entries(value).flatMap(([key, one]) => listUnstorableTexts(one, [...path, key]));
 }
