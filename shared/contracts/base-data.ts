@@ -64,13 +64,22 @@ export const parcelSchema = z.object({
 });
 export type Parcel = z.infer<typeof parcelSchema>;
 
+/** Digits on both sides of the comma: `Number` would take nothing at all for 0. */
+const pointPattern = /^\s*(-?\d+(?:\.\d+)?(?:e-?\d+)?)\s*,\s*(-?\d+(?:\.\d+)?(?:e-?\d+)?)\s*$/;
+
+const pointTextSchema = z.string().transform((text, context) => {
+  const point = lngLatSchema.safeParse(pointPattern.exec(text)?.slice(1).map(Number));
+  if (point.success) return point.data;
+  context.addIssue({
+    code: 'custom',
+    message: 'Write longitude and latitude in degrees, for example -91.3,46.75.',
+  });
+  return z.NEVER;
+});
+
 export const listParcelsQuerySchema = listQuerySchema.extend({
   /** The parcel under this point, `lng,lat`. */
-  at: z
-    .string()
-    .transform((text) => text.split(',').map(Number))
-    .pipe(lngLatSchema)
-    .optional(),
+  at: pointTextSchema.optional(),
   /** Parcels by number, separated by commas. */
   numbers: z
     .string()
