@@ -41,7 +41,9 @@ export async function renderTile(
   const [row] = await em.execute<{ tile: Buffer }[]>(
     `with place as (
        select ST_TileEnvelope(?, ?, ?) as envelope,
-         ST_Transform(ST_TileEnvelope(?, ?, ?, margin => ?), 4326) as reach
+         -- Within the world: what reaches over its edge would come back on the other side.
+         ST_Transform(ST_Intersection(ST_TileEnvelope(?, ?, ?, margin => ?), ST_TileEnvelope(0, 0, 0)), 4326)
+           as reach
      ),
      feature as (
        select ST_AsMVTGeom(ST_Transform(geometry, 3857), envelope, ?, ?, true) as geometry,
