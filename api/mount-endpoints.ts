@@ -6,7 +6,7 @@ import type { Access, Endpoint, UploadedFile } from './endpoint.ts';
 import { AppError } from './errors.ts';
 import { runOnce } from './middleware/idempotency.ts';
 import { createRateLimits } from './middleware/rate-limits.ts';
-import { validate } from './middleware/validate.ts';
+import { isStorableText, validate } from './middleware/validate.ts';
 import { findActor } from './modules/people/find-actor.ts';
 
 /** Mounts every endpoint: limit → who → upload → validate → handle → present. */
@@ -74,16 +74,27 @@ function receiveFile({ field, maxBytes }: { field: string; maxBytes: number }) {
     limits: { fileSize: maxBytes, files: 1, fields: 20, fieldSize: 10_000 },
     defParamCharset: 'utf8',
   }).single(field);
+  const refuse = (message: string, path = field) =>
+    new AppError('INPUT_INVALID', { errors: [{ path, message }] });
+  const toAppError = (error: unknown): AppError => {
+    // A form without its boundary, one that breaks off, a sender that has gone.
+    if (!(error instanceof multer.MulterError)) {
+      return refuse('The upload did not arrive whole. Send the file again, as form data.');
+    }
+    return error.code === 'LIMIT_FILE_SIZE'
+      ? new AppError('UPLOAD_TOO_LARGE')
+      : refuse(`Send one file, in the field ${field}.`, error.field);
+  };
   return async (request: Request, response: Response): Promise<UploadedFile> => {
     await new Promise<void>((resolve, reject) => {
       parse(request, response, (error: unknown) => {
         if (error === undefined || error === null) resolve();
-        else reject(error instanceof Error ? error : new Error('The upload could not be read.'));
+        else reject(toAppError(error));
       });
     });
-    if (request.file === undefined) {
-      throw new AppError('INPUT_INVALID', { errors: [{ path: field, message: 'Choose a file.' }] });
-    }
-    return { fileName: request.file.originalname, bytes: request.file.buffer };
+    if (request.file === undefined) throw refuse('Choose a file.');
+    const { originalname: fileName, buffer: bytes } = request.file;
+    if (!isStorableText(fileName)) throw refuse('Give the file another name.');
+    return { fileName, bytes };
   };
 }

@@ -50,12 +50,16 @@ function describeIssue(issue: z.core.$ZodIssue): InputError[] {
   return [{ path: issue.path.join('.'), message: issue.message }];
 }
 
-/** Texts with a zero character or half a surrogate pair: PostgreSQL keeps neither. */
+/** Whether PostgreSQL keeps this text: not one with a zero character or half a surrogate pair. */
+export function isStorableText(text: string): boolean {
+  return !/\0|\p{Surrogate}/u.test(text);
+}
+
 function listUnstorableTexts(value: unknown, path: readonly string[] = []): InputError[] {
   if (typeof value === 'string') {
-    return /\0|\p{Surrogate}/u.test(value)
-      ? [{ path: path.join('.'), message: 'This text has a character that cannot be kept.' }]
-      : [];
+    return isStorableText(value)
+      ? []
+      : [{ path: path.join('.'), message: 'This text has a character that cannot be kept.' }];
   }
   if (typeof value !== 'object' || value === null) return [];
   return Object.entries(value).flatMap(([key, one]) => listUnstorableTexts(one, [...path, key]));
