@@ -3,6 +3,7 @@ import type { Express } from 'express';
 import type { AppDeps } from './deps.ts';
 import { endpoints } from './endpoints.ts';
 import { errorHandler, notFoundHandler } from './middleware/error-handler.ts';
+import { jsonBody } from './middleware/json-body.ts';
 import { originCheck } from './middleware/origin-check.ts';
 import { requestLog } from './middleware/request-log.ts';
 import { securityHeaders } from './middleware/security-headers.ts';
@@ -26,11 +27,12 @@ export function createApp(deps: AppDeps): Express {
     '/api',
     originCheck(env.PUBLIC_URL),
     sessions(env, deps.sessionStore),
-    express.json({ limit: bodyLimit }),
+    jsonBody(bodyLimit),
   );
   mountEndpoints(app, endpoints, deps);
   app.use('/api', notFoundHandler);
   mountWebClient(app, env.WEB_DIST);
+  app.use(notFoundHandler);
   app.use(errorHandler);
   return app;
 }

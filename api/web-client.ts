@@ -5,7 +5,10 @@ import { shadowWorkerPolicy } from './middleware/security-headers.ts';
 
 const yearMs = 31_536_000_000;
 
-/** Serves the built client: hashed files for ever, the page itself fresh each time. */
+/**
+ * Serves the built client: hashed files for ever, the page itself fresh each time. No file comes in
+ * ranges: they are small, and a range past the end would be an error to answer.
+ */
 export function mountWebClient(app: Express, distFolder: string): void {
   app.use(
     '/assets',
@@ -14,6 +17,7 @@ export function mountWebClient(app: Express, distFolder: string): void {
       maxAge: yearMs,
       index: false,
       fallthrough: false,
+      acceptRanges: false,
       setHeaders: (response, filePath) => {
         if (/shadow-worker[^/\\]*\.js$/.test(path.basename(filePath))) {
           response.setHeader('Content-Security-Policy', shadowWorkerPolicy);
@@ -21,11 +25,11 @@ export function mountWebClient(app: Express, distFolder: string): void {
       },
     }),
   );
-  app.use(express.static(distFolder, { index: false, maxAge: 0 }));
+  app.use(express.static(distFolder, { index: false, maxAge: 0, acceptRanges: false }));
   // Every other path is a page of the client, which reads it by itself.
   app.get('/{*any}', (_request, response) => {
     response.set('Cache-Control', 'no-cache');
     // With a root of its own, so that a dot folder above the client hides nothing.
-    response.sendFile('index.html', { root: distFolder });
+    response.sendFile('index.html', { root: distFolder, acceptRanges: false });
   });
 }

@@ -1,5 +1,4 @@
 import type { ErrorRequestHandler, RequestHandler } from 'express';
-import multer from 'multer';
 import { z } from 'zod';
 import { AppError } from '../errors.ts';
 import { requestIdOf } from './request-log.ts';
@@ -16,40 +15,25 @@ export const errorHandler: ErrorRequestHandler = (error: unknown, request, respo
   const { problem } = known ?? new AppError('INTERNAL');
   response
     .status(problem.status)
+    // What is refused today may be there tomorrow, or for somebody else.
+    .set('Cache-Control', 'no-store')
     .type('application/problem+json')
     .send(JSON.stringify({ ...problem, requestId: requestIdOf(request) }));
 };
 
-/** For a path under /api that no endpoint has. */
+/** For a path that no endpoint has, or not with this method. */
 export const notFoundHandler: RequestHandler = () => {
   throw new AppError('NOT_FOUND');
 };
 
-const parserErrorSchema = z.object({ type: z.string(), status: z.number() });
-
-const missingFileSchema = z.object({ status: z.literal(404) });
+/** What the file server says of a file that is not there or that nobody may ask for. */
+const refusedFileSchema = z.object({ status: z.number().min(400).max(499) });
 
 function toAppError(error: unknown): AppError | null {
   if (error instanceof AppError) return error;
-  if (error instanceof multer.MulterError) {
-    return error.code === 'LIMIT_FILE_SIZE'
-      ? new AppError('UPLOAD_TOO_LARGE')
-      : new AppError('INPUT_INVALID', {
-          errors: [{ path: error.field ?? '', message: 'Send one file in the field named here.' }],
-        });
-  }
-  // A file that is not there, or a path with a broken percent sign.
-  if (error instanceof URIError || missingFileSchema.safeParse(error).success) {
+  // The second: a path with a broken percent sign.
+  if (refusedFileSchema.safeParse(error).success || error instanceof URIError) {
     return new AppError('NOT_FOUND');
-  }
-  const parserError = parserErrorSchema.safeParse(error);
-  if (parserError.success) {
-    if (parserError.data.type === 'entity.too.large') return new AppError('UPLOAD_TOO_LARGE');
-    if (parserError.data.status < 500) {
-      return new AppError('INPUT_INVALID', {
-        errors: [{ path: '', message: 'The body is not readable JSON.' }],
-      });
-    }
   }
   return null;
 }
