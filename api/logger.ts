@@ -1,16 +1,21 @@
 import { pino } from 'pino';
-import type { Logger, LoggerOptions } from 'pino';
+import type { DestinationStream, Logger } from 'pino';
 import type { Env } from './env.ts';
 
-/** The log of one process: JSON lines on stdout. */
-export function createLogger(env: Pick<Env, 'LOG_LEVEL'>, options: LoggerOptions = {}): Logger {
-  return pino({
-    level: env.LOG_LEVEL,
-    base: null,
-    timestamp: pino.stdTimeFunctions.isoTime,
-    serializers: { err: serializeError },
-    ...options,
-  });
+/** The log of one process: JSON lines, on stdout if nowhere else. */
+export function createLogger(
+  env: Pick<Env, 'LOG_LEVEL'>,
+  destination: DestinationStream = pino.destination(),
+): Logger {
+  return pino(
+    {
+      level: env.LOG_LEVEL,
+      base: null,
+      timestamp: pino.stdTimeFunctions.isoTime,
+      serializers: { err: serializeError },
+    },
+    destination,
+  );
 }
 
 /**
