@@ -5,10 +5,10 @@ import { shadowWorkerPolicy } from './middleware/security-headers.ts';
 
 const yearMs = 31_536_000_000;
 
-/**
- * Serves the built client: hashed files for ever, the page itself fresh each time. No file comes in
- * ranges: they are small, and a range past the end would be an error to answer.
- */
+/** Folders are no pages; files are small, and a range past their end would be an error to answer. */
+const wholeFiles = { redirect: false, acceptRanges: false };
+
+/** Serves the built client: hashed files for ever, the page itself fresh each time. */
 export function mountWebClient(app: Express, distFolder: string): void {
   app.use(
     '/assets',
@@ -17,7 +17,7 @@ export function mountWebClient(app: Express, distFolder: string): void {
       maxAge: yearMs,
       index: false,
       fallthrough: false,
-      acceptRanges: false,
+      ...wholeFiles,
       setHeaders: (response, filePath) => {
         if (/shadow-worker[^/\\]*\.js$/.test(path.basename(filePath))) {
           response.setHeader('Content-Security-Policy', shadowWorkerPolicy);
@@ -25,7 +25,7 @@ export function mountWebClient(app: Express, distFolder: string): void {
       },
     }),
   );
-  app.use(express.static(distFolder, { index: false, maxAge: 0, acceptRanges: false }));
+  app.use(express.static(distFolder, { index: false, maxAge: 0, ...wholeFiles }));
   // Every other path is a page of the client, which reads it by itself.
   app.get('/{*any}', (_request, response) => {
     response.set('Cache-Control', 'no-cache');
