@@ -137,13 +137,12 @@ function describeAnswer(
   switch (answer.kind) {
     case 'empty':
       return { 204: { description: 'Done.' } };
-    case 'raw':
-      return {
-        200: {
-          description: 'Done.',
-          content: { [answer.produces]: { schema: { type: 'string', format: 'binary' } } },
-        },
-      };
+    case 'raw': {
+      // Files of JSON have a form of their own, which is published elsewhere.
+      const isJson = /[/+]json$/.test(answer.produces);
+      const schema = isJson ? { type: 'object' } : { type: 'string', format: 'binary' };
+      return { 200: { description: 'Done.', content: { [answer.produces]: { schema } } } };
+    }
     case 'json': {
       const schema = schemas.inline(`${id}-answer`, answer.schema, 'output');
       return {
