@@ -27,11 +27,15 @@ export function sayHours(hours: number): string {
   return rest === 0 ? `${wholeHours} h` : `${wholeHours} h ${String(rest).padStart(2, '0')} min`;
 }
 
+const dayAndMonth = new Intl.DateTimeFormat('en', {
+  month: 'long',
+  day: 'numeric',
+  timeZone: 'UTC',
+});
+
 /** A civil date in English: `December 21`. */
 export function sayDay(date: string): string {
-  return new Intl.DateTimeFormat('en', { month: 'long', day: 'numeric', timeZone: 'UTC' }).format(
-    new Date(`${date}T12:00:00Z`),
-  );
+  return dayAndMonth.format(new Date(`${date}T12:00:00Z`));
 }
 
 /** A measure's value with its unit, in words. */

@@ -8,11 +8,3 @@ export interface PlaneBlock {
   baseM: number;
   topM: number;
 }
-
-/** The direction of the sun. */
-export interface SunDirection {
-  /** Degrees clockwise from true north. */
-  azimuthDeg: number;
-  /** Apparent altitude in degrees, above 0. */
-  altitudeDeg: number;
-}

@@ -1,22 +1,10 @@
-import type { Box, PlanePoint, Ring } from '../geometry/ring.ts';
-import type { PlaneBlock, SunDirection } from './plane-block.ts';
+import { flattenRings, type RingRange } from '../geometry/flat-rings.ts';
+import type { PlanePoint, Ring } from '../geometry/ring.ts';
+import type { PlaneBlock } from './plane-block.ts';
+import { makeSunFrame, pointFromFrame, turnIntoFrame, type SunDirection } from './sun-frame.ts';
 
-/** How a height above a plane moves along it: metres of x and y for each metre of height. */
-export interface ShadowVector {
-  x: number;
-  y: number;
-}
-
-/**
- * The way in which shadows fall on a horizontal plane: away from the sun, by the cotangent of its
- * altitude for each metre of height. The altitude must be above 0.
- */
-export function shadowVector(sun: SunDirection): ShadowVector {
-  if (!(sun.altitudeDeg > 0)) throw new RangeError('With the sun down there are no shadows.');
-  const azimuth = (sun.azimuthDeg * Math.PI) / 180;
-  const cotangent = 1 / Math.tan((sun.altitudeDeg * Math.PI) / 180);
-  return { x: -Math.sin(azimuth) * cotangent, y: -Math.cos(azimuth) * cotangent };
-}
+/** A ring in a sun's frame: x and y in metres, one after the other, the first point not repeated. */
+export type FrameRing = readonly number[];
 
 /**
  * The outline of a block's shadow on a horizontal plane, one contour for each ring of its
@@ -25,68 +13,71 @@ export function shadowVector(sun: SunDirection): ShadowVector {
  * meets the block, so the NonZero fill of all contours of all blocks is exactly the union of their
  * shadows, courtyards and overhangs included.
  *
- * Each vertex moves with the shadow by the block's base above the plane; chains of edges that face
- * away from the sun move by its top.
- *
  * @param planeM height of the plane in metres above the datum
+ * @throws RangeError when the sun is not above the horizon
  */
 export function castBlockContours(block: PlaneBlock, sun: SunDirection, planeM: number): Ring[] {
-  return contoursAlong(block, shadowVector(sun), planeM);
+  const reach = shadowReach(block, planeM);
+  if (reach === null) return [];
+  const frame = makeSunFrame(sun);
+  const { points, rings } = flattenRings(block.rings);
+  const turned = turnIntoFrame(points, frame);
+  return rings.map((ring) =>
+    pointsOfRing(
+      castContour(turned, ring, reach.nearM * frame.cotangent, reach.farM * frame.cotangent),
+      (x, y) => pointFromFrame(x, y, frame),
+    ),
+  );
 }
 
-/** As `castBlockContours`, with the way of the shadows worked out beforehand. */
-export function contoursAlong(block: PlaneBlock, along: ShadowVector, planeM: number): Ring[] {
-  const topAboveM = block.topM - planeM;
-  if (topAboveM <= 0) return [];
-  const baseAboveM = Math.max(block.baseM - planeM, 0);
-  return block.rings.map((ring) => sweepRing(ring, along, baseAboveM, topAboveM));
+/** The heights in metres above a plane between which a block throws shade on it; null where it throws none. */
+export function shadowReach(
+  { baseM, topM }: Pick<PlaneBlock, 'baseM' | 'topM'>,
+  planeM: number,
+): { nearM: number; farM: number } | null {
+  const farM = topM - planeM;
+  return farM > 0 ? { nearM: Math.max(baseM - planeM, 0), farM } : null;
 }
 
-/** The box around a block's shadow on a plane; null where it casts none. */
-export function shadowBox(block: PlaneBlock, along: ShadowVector, planeM: number): Box | null {
-  const topAboveM = block.topM - planeM;
-  if (topAboveM <= 0) return null;
-  const baseAboveM = Math.max(block.baseM - planeM, 0);
-  const { minX, minY, maxX, maxY } = block.box;
-  return {
-    minX: minX + Math.min(along.x * baseAboveM, along.x * topAboveM),
-    maxX: maxX + Math.max(along.x * baseAboveM, along.x * topAboveM),
-    minY: minY + Math.min(along.y * baseAboveM, along.y * topAboveM),
-    maxY: maxY + Math.max(along.y * baseAboveM, along.y * topAboveM),
-  };
-}
-
-function sweepRing(ring: Ring, along: ShadowVector, nearM: number, farM: number): Ring {
-  const nearX = along.x * nearM;
-  const nearY = along.y * nearM;
-  const farX = along.x * farM;
-  const farY = along.y * farM;
-  const contour: PlanePoint[] = [];
-  let previous = ring[ring.length - 1];
-  if (previous === undefined) return contour;
-  let wasFar = facesAway(ring[ring.length - 2] ?? previous, previous, along);
-  for (const point of ring) {
-    const isFar = facesAway(previous, point, along);
-    // The vertex between two edges is drawn once for each offset that they have.
-    contour.push(
-      wasFar
-        ? [previous[0] + farX, previous[1] + farY]
-        : [previous[0] + nearX, previous[1] + nearY],
-    );
-    if (isFar !== wasFar) {
-      contour.push(
-        isFar
-          ? [previous[0] + farX, previous[1] + farY]
-          : [previous[0] + nearX, previous[1] + nearY],
-      );
-    }
-    wasFar = isFar;
-    previous = point;
+/**
+ * The contour that a ring of a footprint throws in its sun's frame: edges that run up have their
+ * outer side away from the sun and move by the far shift, the others by the near one.
+ *
+ * @param nearShiftM how far the shadow of the block's base moves along x
+ * @param farShiftM the same of its top
+ */
+export function castContour(
+  points: Float64Array,
+  { start, end }: RingRange,
+  nearShiftM: number,
+  farShiftM: number,
+): FrameRing {
+  const contour: number[] = [];
+  let x = points[end - 2] ?? NaN;
+  let y = points[end - 1] ?? NaN;
+  let cameUp = y > (points[end - 3] ?? NaN);
+  // A vertex between two edges is drawn once for each shift that they have.
+  for (let index = start; index < end; index += 2) {
+    const nextX = points[index] ?? NaN;
+    const nextY = points[index + 1] ?? NaN;
+    const goesUp = nextY > y;
+    contour.push(x + (cameUp ? farShiftM : nearShiftM), y);
+    if (goesUp !== cameUp) contour.push(x + (goesUp ? farShiftM : nearShiftM), y);
+    x = nextX;
+    y = nextY;
+    cameUp = goesUp;
   }
   return contour;
 }
 
-/** Whether an edge's outer side, on its right, looks the way the shadow falls. */
-function facesAway(from: PlanePoint, to: PlanePoint, along: ShadowVector): boolean {
-  return (to[1] - from[1]) * along.x - (to[0] - from[0]) * along.y > 0;
+/** A ring of a sun's frame as points, each made by `pointAt`. */
+export function pointsOfRing(
+  ring: FrameRing,
+  pointAt: (x: number, y: number) => PlanePoint,
+): PlanePoint[] {
+  const points: PlanePoint[] = [];
+  for (let index = 0; index + 1 < ring.length; index += 2) {
+    points.push(pointAt(ring[index] ?? NaN, ring[index + 1] ?? NaN));
+  }
+  return points;
 }

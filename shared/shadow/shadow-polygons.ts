@@ -1,12 +1,15 @@
-import type { PathsD, PolyPathD } from 'clipper2-wasm/dist/clipper2z';
-import { boxesOverlap, joinBoxes, type Box, type PlanePoint, type Ring } from '../geometry/ring.ts';
+import { boxesOverlap, joinBoxes, type Box, type Ring } from '../geometry/ring.ts';
+import { metreGrid, combineRings, makePaths, type FramePolygon } from './clipper-paths.ts';
 import type { Clipper } from './clipper.ts';
+import type { LitArea } from './receptor-light.ts';
+import { castContour, pointsOfRing, type FrameRing } from './shadow-contours.ts';
 import type { BlockShadow, ShadowLayer, ShadowRole } from './shadow-layer.ts';
+import { pointFromFrame, type SunFrame } from './sun-frame.ts';
 
 /** Polygons on the local plane: each a shell followed by its holes. */
-export type PlanePolygons = Ring[][];
+export type PlanePolygons = readonly Ring[][];
 
-/** What is drawn at one instant. */
+/** What is drawn at one instant. A polygon that is the same before and after is one object. */
 export interface ShadowPolygons {
   before: PlanePolygons;
   after: PlanePolygons;
@@ -14,122 +17,128 @@ export interface ShadowPolygons {
   netNew: PlanePolygons;
 }
 
-/** Decimal places of a metre that Clipper2 keeps: coarser ones cost visible area (0.04 m² at 3). */
-const decimals = 5;
-
-/** Holes and slivers below this area (m²) are rounding and are not drawn. */
-const leastAreaM2 = 1e-3;
-
 /**
  * The shadows of a layer as polygons valid by OGC's rules, by Clipper2 with the NonZero fill: the
- * union before, the union after, and what the proposal adds.
+ * union before, the union after, and what the proposal adds. They are combined in the sun's frame,
+ * where the long sides of shadows are level and Clipper2's own sweep meets few of them at a time.
  *
  * @throws when Clipper2 reports a failure
  */
 export function drawShadowPolygons(clipper: Clipper, layer: ShadowLayer): ShadowPolygons {
-  const context = contoursOf(layer.shadows, 'context');
-  const existing = contoursOf(layer.shadows, 'existing');
-  const proposed = layer.shadows.filter(({ role }) => role === 'proposed');
-  const proposedContours = proposed.flatMap(({ contours }) => contours);
-  const reach = proposed
-    .map(({ box }) => box)
-    .reduce<Box | null>((joined, box) => (joined === null ? box : joinBoxes(joined, box)), null);
+  const ofRole = (role: ShadowRole) => layer.shadows.filter((shadow) => shadow.role === role);
+  const existing = ofRole('existing');
+  const proposed = ofRole('proposed');
+  const context = combineRings(clipper, 'Union', contoursOf(layer, ofRole('context')));
+  const toPlane = planePolygonsOf(layer.frame);
+  const proposedBox = boxOfShadows(proposed);
   // Only what overlaps the proposal's shadow can take from the net new shadow.
-  const standing = layer.shadows
-    .filter(({ role, box }) => role !== 'proposed' && reach !== null && boxesOverlap(box, reach))
-    .flatMap(({ contours }) => contours);
+  const standing = layer.shadows.filter(
+    ({ role, box }) =>
+      role !== 'proposed' && proposedBox !== null && boxesOverlap(box, proposedBox),
+  );
   return {
-    before: combine(clipper, 'Union', [...context, ...existing], []),
-    after: combine(clipper, 'Union', [...context, ...proposedContours], []),
-    netNew: combine(clipper, 'Difference', proposedContours, standing),
+    before: toPlane(addShadows(clipper, layer, context, existing)),
+    after: toPlane(addShadows(clipper, layer, context, proposed)),
+    netNew:
+      proposed.length === 0
+        ? []
+        : toPlane(
+            combineRings(
+              clipper,
+              'Difference',
+              contoursOf(layer, proposed),
+              contoursOf(layer, standing),
+            ),
+          ),
   };
 }
 
-/** The part of polygons that lies in an area, in m²; the second way to a receptor's figures. */
-export function overlapAreaM2(
+/**
+ * The part of polygons that lies in each of some areas, in m²; the second way to a receptor's
+ * figures.
+ */
+export function overlapAreasM2(
   clipper: Clipper,
   polygons: PlanePolygons,
-  areaRings: readonly Ring[],
-): number {
-  const subjects = pathsOf(clipper, polygons.flat());
-  const clips = pathsOf(clipper, areaRings);
-  const overlap = clipper.IntersectD(subjects, clips, clipper.FillRule.Positive, decimals);
-  const areaM2 = clipper.AreaPathsD(overlap);
-  [subjects, clips, overlap].forEach((paths) => paths.delete());
-  return areaM2;
+  areas: readonly LitArea[],
+): number[] {
+  const subjects = makePaths(clipper, coordinatesOf(polygons.flat()));
+  const overlaps = areas.map(({ rings, siteRings }) => {
+    const outside = siteRings.map((ring) => ring.toReversed());
+    const clips = makePaths(clipper, coordinatesOf([...rings, ...outside]));
+    const overlap = clipper.IntersectD(subjects, clips, clipper.FillRule.Positive, metreGrid.decimals);
+    const areaM2 = clipper.AreaPathsD(overlap);
+    [clips, overlap].forEach((paths) => paths.delete());
+    return areaM2;
+  });
+  subjects.delete();
+  return overlaps;
 }
 
 /** The union of polygons that may touch or overlap, as valid rings. */
 export function uniteRings(clipper: Clipper, rings: readonly Ring[]): Ring[] {
-  return combine(clipper, 'Union', rings, []).flat();
+  const united = combineRings(clipper, 'Union', coordinatesOf(rings));
+  return united.flat().map((ring) => pointsOfRing(ring, (x, y) => [x, y]));
 }
 
-function contoursOf(shadows: readonly BlockShadow[], role: ShadowRole): Ring[] {
-  return shadows.filter((one) => one.role === role).flatMap(({ contours }) => contours);
-}
-
-function combine(
+/** A union with more shadows: polygons that none of them can reach stay as they are. */
+function addShadows(
   clipper: Clipper,
-  operation: 'Union' | 'Difference',
-  subjects: readonly Ring[],
-  clips: readonly Ring[],
-): PlanePolygons {
-  if (subjects.length === 0) return [];
-  const engine = new clipper.ClipperD(decimals);
-  const subjectPaths = pathsOf(clipper, subjects);
-  const clipPaths = pathsOf(clipper, clips);
-  const tree = new clipper.PolyPathD();
-  try {
-    engine.AddSubject(subjectPaths);
-    engine.AddClip(clipPaths);
-    if (!engine.ExecutePoly(clipper.ClipType[operation], clipper.FillRule.NonZero, tree)) {
-      throw new Error(`Clipper2 could not compute the ${operation.toLowerCase()} of shadows.`);
-    }
-    return polygonsOfTree(tree);
-  } finally {
-    [engine, subjectPaths, clipPaths, tree].forEach((object) => object.delete());
-  }
+  layer: ShadowLayer,
+  united: readonly FramePolygon[],
+  more: readonly BlockShadow[],
+): readonly FramePolygon[] {
+  const box = boxOfShadows(more);
+  if (box === null) return united;
+  // A border shared with one of them counts as reached, so that the two become one.
+  const reach = { minX: box.minX - 1, minY: box.minY - 1, maxX: box.maxX + 1, maxY: box.maxY + 1 };
+  const reached = new Set(united.filter((polygon) => boxesOverlap(boxOfShell(polygon), reach)));
+  const joined = combineRings(clipper, 'Union', [
+    ...[...reached].flat(),
+    ...contoursOf(layer, more),
+  ]);
+  return [...united.filter((polygon) => !reached.has(polygon)), ...joined];
 }
 
-function pathsOf(clipper: Clipper, rings: readonly Ring[]): PathsD {
-  const paths = new clipper.PathsD();
-  for (const ring of rings) {
-    const path = new clipper.PathD();
-    const coordinates = new Float64Array(ring.length * 3);
-    ring.forEach(([x, y], index) => {
-      coordinates[index * 3] = x;
-      coordinates[index * 3 + 1] = y;
+function contoursOf({ points }: ShadowLayer, shadows: readonly BlockShadow[]): FrameRing[] {
+  return shadows.flatMap(({ rings, nearShiftM, farShiftM }) =>
+    rings.map((ring) => castContour(points, ring, nearShiftM, farShiftM)),
+  );
+}
+
+function boxOfShell([shell = []]: FramePolygon): Box {
+  const box = { minX: Infinity, minY: Infinity, maxX: -Infinity, maxY: -Infinity };
+  for (let index = 0; index + 1 < shell.length; index += 2) {
+    const x = shell[index] ?? NaN;
+    const y = shell[index + 1] ?? NaN;
+    box.minX = Math.min(box.minX, x);
+    box.maxX = Math.max(box.maxX, x);
+    box.minY = Math.min(box.minY, y);
+    box.maxY = Math.max(box.maxY, y);
+  }
+  return box;
+}
+
+function boxOfShadows(shadows: readonly BlockShadow[]): Box | null {
+  return shadows.reduce<Box | null>(
+    (joined, { box }) => (joined === null ? box : joinBoxes(joined, box)),
+    null,
+  );
+}
+
+/** Turns polygons back onto the local plane; the same polygon gives the same object. */
+function planePolygonsOf(frame: SunFrame): (polygons: readonly FramePolygon[]) => PlanePolygons {
+  const known = new Map<FramePolygon, Ring[]>();
+  return (polygons) =>
+    polygons.map((polygon) => {
+      const rings =
+        known.get(polygon) ??
+        polygon.map((ring) => pointsOfRing(ring, (x, y) => pointFromFrame(x, y, frame)));
+      known.set(polygon, rings);
+      return rings;
     });
-    path.assign(coordinates);
-    paths.push_back(path);
-    path.delete();
-  }
-  return paths;
 }
 
-/** Shells stand at even depths of the tree, each with its holes below it. */
-function polygonsOfTree(tree: PolyPathD): PlanePolygons {
-  const polygons: PlanePolygons = [];
-  for (let index = 0; index < tree.count(); index += 1) {
-    const shell = tree.child(index);
-    const rings = [ringOf(shell)];
-    for (let hole = 0; hole < shell.count(); hole += 1) {
-      const holeNode = shell.child(hole);
-      if (Math.abs(holeNode.area()) >= leastAreaM2) rings.push(ringOf(holeNode));
-      polygons.push(...polygonsOfTree(holeNode));
-    }
-    if (Math.abs(shell.area()) >= leastAreaM2) polygons.push(rings);
-  }
-  return polygons;
-}
-
-function ringOf(node: PolyPathD): Ring {
-  const path = node.polygon();
-  const coordinates = path.view();
-  const ring: PlanePoint[] = [];
-  for (let index = 0; index + 1 < coordinates.length; index += 3) {
-    ring.push([coordinates[index] ?? 0, coordinates[index + 1] ?? 0]);
-  }
-  path.delete();
-  return ring;
+function coordinatesOf(rings: readonly Ring[]): FrameRing[] {
+  return rings.map((ring) => ring.flat());
 }

@@ -1,26 +1,10 @@
-import type { Box, Ring } from '../geometry/ring.ts';
-import { addRing, createSweepEdges, type SweepEdges } from './sweep-edges.ts';
-
-/** Rings whose winding number the sweep follows in one of its counters. */
-export interface SweepLayer {
-  counter: number;
-  rings: readonly Ring[];
-}
-
-/** Given the winding number of each counter: the index of the area to which a region belongs, or −1. */
-export type Classify = (windings: Int32Array) => number;
-
-/** Adds to `areas` (m²) the regions inside the box, told apart by `classify`. */
-export type MeasureAreas = (
-  layers: readonly SweepLayer[],
-  box: Box,
-  classify: Classify,
-  areas: Float64Array,
-) => void;
+import type { RingRange } from '../geometry/flat-rings.ts';
+import type { Box } from '../geometry/ring.ts';
+import { addEdge, createSweepEdges, type SweepEdges } from './sweep-edges.ts';
 
 /**
- * Makes a measure of areas under winding numbers: a sweep over horizontal strips that never builds
- * a polygon, so that nothing can break; rounding moves an area by about 1e-11 m².
+ * A measure of areas under winding numbers: a sweep over level strips that never builds a polygon,
+ * so that nothing can break; rounding moves an area by about 1e-11 m².
  *
  * Between two neighbouring heights at which edges begin, end or cross, the edges stand in a fixed
  * order from left to right, and between two of them each winding number is constant: the regions
@@ -28,56 +12,76 @@ export type MeasureAreas = (
  * counter-clockwise ring has the solid on its left, so a walk from left to right loses one at it
  * and gains one at a downward edge.
  *
- * The measure keeps its scratch memory from call to call: make one for each study.
- *
- * @param counterCount how many counters the layers use
+ * It keeps its scratch memory from box to box: make one for each study.
  */
-export function createWindingSweep(counterCount: number): MeasureAreas {
-  const edges = createSweepEdges();
+export interface WindingSweep {
+  /** Begins anew inside a box, with no ring. */
+  start: (box: Box) => void;
+  /**
+   * Adds a ring of an array of points to a counter. Edges that run up are moved by `upShiftM` along
+   * x, the others by `downShiftM`.
+   */
+  addRing: (
+    points: Float64Array,
+    ring: RingRange,
+    counter: number,
+    upShiftM?: number,
+    downShiftM?: number,
+  ) => void;
+  /**
+   * The regions inside the box, in m².
+   *
+   * @param outcomes for each set of counters whose winding number is above 0, as a number with one
+   * bit for each counter: the index of the area that its regions add to, or −1
+   */
+  measure: (outcomes: Int8Array, areas: Float64Array) => void;
+}
+
+/** @param counterCount how many counters there are */
+export function createWindingSweep(counterCount: number): WindingSweep {
+  const edges = createSweepEdges(counterCount);
   const windings = new Int32Array(counterCount);
-  let strip = createStrip(64);
-
-  return (layers, box, classify, areas) => {
-    edges.count = 0;
-    for (const { counter, rings } of layers) {
-      for (const ring of rings) addRing(edges, ring, counter, box);
-    }
-    if (edges.count === 0) return;
-    if (strip.edge.length < edges.count) strip = createStrip(edges.count * 2);
-
-    const heights = stripHeights(edges);
-    const byLowEnd = edgesByLowEnd(edges);
-    let waiting = 0;
-    strip.count = 0;
-    for (let index = 0; index + 1 < heights.length; index += 1) {
-      const bottomY = real(heights, index);
-      const topY = real(heights, index + 1);
-      dropEnded(strip, edges, bottomY);
-      while (waiting < byLowEnd.length) {
-        const edge = whole(byLowEnd, waiting);
-        if (real(edges.lowY, edge) > bottomY) break;
-        strip.edge[strip.count] = edge;
-        strip.count += 1;
-        waiting += 1;
+  let strip = createStrip(256);
+  let box: Box = { minX: 0, minY: 0, maxX: 0, maxY: 0 };
+  return {
+    start: (next) => {
+      box = next;
+      edges.count = 0;
+      edges.leftWindings.fill(0);
+    },
+    addRing: (points, { start, end }, counter, upShiftM = 0, downShiftM = 0) => {
+      let fromX = real(points, end - 2);
+      let fromY = real(points, end - 1);
+      for (let index = start; index < end; index += 2) {
+        const toX = real(points, index);
+        const toY = real(points, index + 1);
+        const shiftM = toY > fromY ? upShiftM : downShiftM;
+        addEdge(edges, fromX + shiftM, fromY, toX + shiftM, toY, counter, box);
+        fromX = toX;
+        fromY = toY;
       }
-      placeEdges(strip, edges, bottomY, topY);
-      sweepStrip(strip, edges, box, topY - bottomY, windings, classify, areas);
-    }
+    },
+    measure: (outcomes, areas) => {
+      if (strip.edge.length < edges.count) strip = createStrip(edges.count * 2);
+      sweep(strip, edges, box, windings, outcomes, areas);
+    },
   };
 }
 
 /**
- * The edges of one strip from left to right at its lower side, with the places at which they enter
- * it below and leave it above. The next strip finds them nearly sorted.
+ * The edges of one strip from left to right, with the places at which they enter it below and leave
+ * it above. The next strip finds them nearly sorted.
  */
 interface Strip {
   count: number;
   edge: Int32Array;
   bottomX: Float64Array;
   topX: Float64Array;
-  /** Indices into the three above, in the order of a part of the strip. */
+  /** All edges by their lower ends, and the heights at which strips meet. */
+  byLowEnd: Int32Array;
+  heights: Float64Array;
+  /** The upper side's order, while crossings are sought. */
   order: Int32Array;
-  middleX: Float64Array;
 }
 
 function createStrip(capacity: number): Strip {
@@ -86,29 +90,78 @@ function createStrip(capacity: number): Strip {
     edge: new Int32Array(capacity),
     bottomX: new Float64Array(capacity),
     topX: new Float64Array(capacity),
+    byLowEnd: new Int32Array(capacity),
+    heights: new Float64Array(capacity * 2 + 2),
     order: new Int32Array(capacity),
-    middleX: new Float64Array(capacity),
   };
 }
 
-function dropEnded(strip: Strip, edges: SweepEdges, bottomY: number): void {
+function sweep(
+  strip: Strip,
+  edges: SweepEdges,
+  box: Box,
+  windings: Int32Array,
+  outcomes: Int8Array,
+  areas: Float64Array,
+): void {
+  const heightCount = listHeights(strip, edges, box);
+  sortByLowEnd(strip, edges);
+  let waiting = 0;
+  strip.count = 0;
+  for (let index = 0; index + 1 < heightCount; index += 1) {
+    const bottomY = real(strip.heights, index);
+    const topY = real(strip.heights, index + 1);
+    rise(strip, edges, bottomY);
+    while (waiting < edges.count) {
+      const edge = whole(strip.byLowEnd, waiting);
+      if (real(edges.lowY, edge) > bottomY) break;
+      strip.edge[strip.count] = edge;
+      strip.bottomX[strip.count] = real(edges.lowX, edge);
+      strip.count += 1;
+      waiting += 1;
+    }
+    const isCrossed = placeEdges(strip, edges, topY);
+    let fromShare = 0;
+    if (isCrossed) {
+      for (const toShare of crossingShares(strip)) {
+        if (toShare <= fromShare) continue;
+        const share = (fromShare + toShare) / 2;
+        sortAt(strip, share);
+        const heightM = (topY - bottomY) * (toShare - fromShare);
+        addTrapezoids(strip, edges, box, share, heightM, windings, outcomes, areas);
+        fromShare = toShare;
+      }
+      sortAt(strip, (fromShare + 1) / 2);
+    }
+    const heightM = (topY - bottomY) * (1 - fromShare);
+    addTrapezoids(strip, edges, box, (fromShare + 1) / 2, heightM, windings, outcomes, areas);
+  }
+}
+
+/** Drops the edges that end below, and takes the others' places at the last strip's upper side. */
+function rise(strip: Strip, edges: SweepEdges, bottomY: number): void {
   let kept = 0;
   for (let index = 0; index < strip.count; index += 1) {
     const edge = whole(strip.edge, index);
     if (real(edges.highY, edge) > bottomY) {
       strip.edge[kept] = edge;
+      strip.bottomX[kept] = real(strip.topX, index);
       kept += 1;
     }
   }
   strip.count = kept;
 }
 
-/** Works out where each edge crosses the strip, and sorts them by insertion. */
-function placeEdges(strip: Strip, edges: SweepEdges, bottomY: number, topY: number): void {
+/**
+ * Works out where each edge leaves the strip, and sorts them by insertion at its lower side.
+ *
+ * @returns whether some of them cross
+ */
+function placeEdges(strip: Strip, edges: SweepEdges, topY: number): boolean {
   const { edge, bottomX, topX } = strip;
   for (let index = 0; index < strip.count; index += 1) {
     const moved = whole(edge, index);
-    const movedBottom = xAt(edges, moved, bottomY);
+    const movedBottom = real(bottomX, index);
     const movedTop = xAt(edges, moved, topY);
     let place = index;
     while (place > 0) {
@@ -124,137 +177,148 @@ function placeEdges(strip: Strip, edges: SweepEdges, bottomY: number, topY: numb
     bottomX[place] = movedBottom;
     topX[place] = movedTop;
   }
-}
-
-function sweepStrip(
-  strip: Strip,
-  edges: SweepEdges,
-  box: Box,
-  heightM: number,
-  windings: Int32Array,
-  classify: Classify,
-  areas: Float64Array,
-): void {
-  for (let index = 0; index < strip.count; index += 1) strip.order[index] = index;
-  let fromShare = 0;
-  for (const toShare of crossingShares(strip)) {
-    if (toShare <= fromShare) continue;
-    placeMiddles(strip, (fromShare + toShare) / 2);
-    addTrapezoids(strip, edges, box, heightM * (toShare - fromShare), windings, classify, areas);
-    fromShare = toShare;
+  for (let index = 1; index < strip.count; index += 1) {
+    if (real(topX, index - 1) > real(topX, index)) return true;
   }
-  placeMiddles(strip, (fromShare + 1) / 2);
-  addTrapezoids(strip, edges, box, heightM * (1 - fromShare), windings, classify, areas);
+  return false;
 }
-
-const noShares: readonly number[] = [];
 
 /** The shares of the strip's height at which two of its edges cross, rising. */
-function crossingShares({ count, topX, bottomX, order }: Strip): readonly number[] {
-  let isSorted = true;
-  for (let index = 1; index < count && isSorted; index += 1) {
-    isSorted = real(topX, index - 1) <= real(topX, index);
-  }
-  if (isSorted) return noShares;
+function crossingShares({ count, topX, bottomX, order }: Strip): number[] {
   const shares: number[] = [];
   // An insertion sort by the upper side swaps exactly the pairs that cross within the strip.
-  for (let index = 1; index < count; index += 1) {
-    const moved = whole(order, index);
-    const movedTop = real(topX, moved);
+  for (let index = 0; index < count; index += 1) {
+    const movedTop = real(topX, index);
     let place = index;
     while (place > 0) {
       const passed = whole(order, place - 1);
       const gapTop = real(topX, passed) - movedTop;
       if (gapTop <= 0) break;
-      const gapBottom = real(bottomX, moved) - real(bottomX, passed);
+      const gapBottom = real(bottomX, index) - real(bottomX, passed);
       if (gapBottom > 0) shares.push(gapBottom / (gapBottom + gapTop));
       order[place] = passed;
       place -= 1;
     }
-    order[place] = moved;
+    order[place] = index;
   }
   return shares.sort((a, b) => a - b);
 }
 
-/** Sorts `order` by the places at a share of the strip's height, in `middleX`. */
-function placeMiddles({ count, order, bottomX, topX, middleX }: Strip, share: number): void {
-  for (let index = 0; index < count; index += 1) {
-    const bottom = real(bottomX, index);
-    middleX[index] = bottom + (real(topX, index) - bottom) * share;
-  }
+/** Sorts the edges by insertion at a share of the strip's height. */
+function sortAt({ count, edge, bottomX, topX }: Strip, share: number): void {
   for (let index = 1; index < count; index += 1) {
-    const moved = whole(order, index);
-    const movedX = real(middleX, moved);
+    const moved = whole(edge, index);
+    const movedBottom = real(bottomX, index);
+    const movedTop = real(topX, index);
+    const movedX = between(movedBottom, movedTop, share);
     let place = index;
-    while (place > 0) {
-      const passed = whole(order, place - 1);
-      if (real(middleX, passed) <= movedX) break;
-      order[place] = passed;
+    while (place > 0 && between(real(bottomX, place - 1), real(topX, place - 1), share) > movedX) {
+      edge[place] = whole(edge, place - 1);
+      bottomX[place] = real(bottomX, place - 1);
+      topX[place] = real(topX, place - 1);
       place -= 1;
     }
-    order[place] = moved;
+    edge[place] = moved;
+    bottomX[place] = movedBottom;
+    topX[place] = movedTop;
   }
 }
 
 /** Adds a part of a strip in which no edges cross: a trapezoid's mean width is that half way up. */
 function addTrapezoids(
-  { count, edge, order, middleX }: Strip,
+  { count, edge, bottomX, topX }: Strip,
   edges: SweepEdges,
   box: Box,
+  middleShare: number,
   heightM: number,
   windings: Int32Array,
-  classify: Classify,
+  outcomes: Int8Array,
   areas: Float64Array,
 ): void {
-  windings.fill(0);
+  let inside = 0;
+  for (let counter = 0; counter < windings.length; counter += 1) {
+    const winding = whole(edges.leftWindings, counter);
+    windings[counter] = winding;
+    if (winding > 0) inside |= 1 << counter;
+  }
   let previousX = box.minX;
   for (let index = 0; index <= count; index += 1) {
-    const x = index < count ? real(middleX, whole(order, index)) : box.maxX;
+    const x =
+      index < count ? between(real(bottomX, index), real(topX, index), middleShare) : box.maxX;
     if (x > previousX) {
-      const area = classify(windings);
+      const area = outcomes[inside] ?? -1;
       if (area >= 0) areas[area] = real(areas, area) + (x - previousX) * heightM;
       previousX = x;
     }
     if (index < count) {
-      const current = whole(edge, whole(order, index));
+      const current = whole(edge, index);
       const counter = whole(edges.counter, current);
-      windings[counter] = whole(windings, counter) - whole(edges.winding, current);
+      const winding = whole(windings, counter) - whole(edges.winding, current);
+      windings[counter] = winding;
+      if (winding > 0) inside |= 1 << counter;
+      else inside &= ~(1 << counter);
     }
   }
 }
 
-/** The heights at which edges begin or end, rising, each once. */
-function stripHeights(edges: SweepEdges): Float64Array {
-  const heights = new Float64Array(edges.count * 2);
-  heights.set(edges.lowY.subarray(0, edges.count));
-  heights.set(edges.highY.subarray(0, edges.count), edges.count);
-  heights.sort();
+/** The heights at which edges begin or end, and the box's own ends: rising, each once. */
+function listHeights({ heights }: Strip, edges: SweepEdges, box: Box): number {
+  let count = 0;
+  for (let edge = 0; edge < edges.count; edge += 1) {
+    heights[count] = real(edges.lowY, edge);
+    heights[count + 1] = real(edges.highY, edge);
+    count += 2;
+  }
+  heights[count] = box.minY;
+  heights[count + 1] = box.maxY;
+  count += 2;
+  for (const gap of shellGaps) {
+    for (let index = gap; index < count; index += 1) {
+      const moved = real(heights, index);
+      let place = index;
+      while (place >= gap && real(heights, place - gap) > moved) {
+        heights[place] = real(heights, place - gap);
+        place -= gap;
+      }
+      heights[place] = moved;
+    }
+  }
   let kept = 1;
-  for (let index = 1; index < heights.length; index += 1) {
+  for (let index = 1; index < count; index += 1) {
     const height = real(heights, index);
     if (height > real(heights, kept - 1)) {
       heights[kept] = height;
       kept += 1;
     }
   }
-  return heights.subarray(0, kept);
+  return kept;
 }
 
-function edgesByLowEnd(edges: SweepEdges): Int32Array {
-  const sorted = new Int32Array(edges.count);
-  for (let index = 0; index < sorted.length; index += 1) sorted[index] = index;
-  return sorted.sort((a, b) => real(edges.lowY, a) - real(edges.lowY, b));
+/** Ciura, M. (2001), "Best increments for the average case of Shellsort", FCT 2001, 106–117. */
+const shellGaps = [701, 301, 132, 57, 23, 10, 4, 1];
+
+function sortByLowEnd({ byLowEnd }: Strip, edges: SweepEdges): void {
+  for (let index = 0; index < edges.count; index += 1) byLowEnd[index] = index;
+  for (const gap of shellGaps) {
+    for (let index = gap; index < edges.count; index += 1) {
+      const moved = whole(byLowEnd, index);
+      const movedY = real(edges.lowY, moved);
+      let place = index;
+      while (place >= gap && real(edges.lowY, whole(byLowEnd, place - gap)) > movedY) {
+        byLowEnd[place] = whole(byLowEnd, place - gap);
+        place -= gap;
+      }
+      byLowEnd[place] = moved;
+    }
+  }
 }
 
 function xAt(edges: SweepEdges, edge: number, y: number): number {
-  const lowY = real(edges.lowY, edge);
-  const lowX = real(edges.lowX, edge);
-  if (y <= lowY) return lowX;
-  const highY = real(edges.highY, edge);
-  const highX = real(edges.highX, edge);
-  if (y >= highY) return highX;
-  return lowX + ((highX - lowX) * (y - lowY)) / (highY - lowY);
+  if (y >= real(edges.highY, edge)) return real(edges.highX, edge);
+  return real(edges.lowX, edge) + (y - real(edges.lowY, edge)) * real(edges.slope, edge);
 }
+
+const between = (from: number, to: number, share: number): number => from + (to - from) * share;
 
 // One reader for each kind of array keeps the hot loops on one type. The sweep's own counts keep
 // every index inside its array.

@@ -1,3 +1,4 @@
+import { joinBoxes } from '../geometry/ring.ts';
 import type { Clipper } from '../shadow/clipper.ts';
 import { planClauses, type ClausePlan } from './clause-plan.ts';
 import { crossCheckReceptors, type CrossCheck } from './cross-check.ts';
@@ -6,7 +7,7 @@ import { drawInstant, type InstantShadowPolygons } from './draw-instant.ts';
 import { engineVersion } from './engine-version.ts';
 import type { EvidenceFile, ReceptorResult, StudyInput, StudyInstant } from './evidence-schema.ts';
 import { areaChangesOnGround } from './ground-change.ts';
-import { lightAtInstant, type InstantLight } from './instant-light.ts';
+import { lightAtInstant, type InstantLight, type Reach } from './instant-light.ts';
 import { createStudyJudge } from './judge-study.ts';
 import { defaultInstants } from './key-date-instants.ts';
 import { roundArea, roundMeasure } from './rounding.ts';
@@ -43,12 +44,21 @@ export async function computeStudy(
   const { cumulativeBlocks } = scene;
   const cumulativeJudge = cumulativeBlocks === null ? null : createStudyJudge(plans, input);
   const listed = listedInstants(input);
-  const light = await computeLight(input, scene, listed, plans, options, (instant, dates) => {
-    for (const date of dates) judge.take(date, instant);
-    if (cumulativeJudge === null || cumulativeBlocks === null || dates.length === 0) return;
-    const cumulative = lightAtInstant(scene, cumulativeBlocks, input, instant.atMs);
-    for (const date of dates) cumulativeJudge.take(date, cumulative);
-  });
+  const reach = reachOfReceptors(scene, plans);
+  const light = await computeLight(
+    input,
+    scene,
+    reach,
+    listed,
+    plans,
+    options,
+    (instant, dates) => {
+      for (const date of dates) judge.take(date, instant);
+      if (cumulativeJudge === null || cumulativeBlocks === null || dates.length === 0) return;
+      const cumulative = lightAtInstant(scene, cumulativeBlocks, input, instant.atMs, reach);
+      for (const date of dates) cumulativeJudge.take(date, cumulative);
+    },
+  );
   const { results, findings } = judge.judge();
   const evidence = {
     ...input,
@@ -81,19 +91,16 @@ export async function computeListedInstants(
   input: StudyInput,
   options: ComputeStudyOptions,
 ): Promise<ListedLight> {
-  return computeLight(
-    input,
-    buildScene(input),
-    listedInstants(input),
-    [],
-    options,
-    () => undefined,
-  );
+  const scene = buildScene(input);
+  const listed = listedInstants(input);
+  const reach = reachOfReceptors(scene, []);
+  return computeLight(input, scene, reach, listed, [], options, () => undefined);
 }
 
 async function computeLight(
   input: StudyInput,
   scene: Scene,
+  reach: Reach,
   listed: readonly string[],
   plans: readonly ClausePlan[],
   { clipper, onProgress }: ComputeStudyOptions,
@@ -106,7 +113,9 @@ async function computeLight(
   const receptorRows = scene.receptors.map((): ReceptorResult['instants'] => []);
   let done = 0;
   for (const [atMs, wanted] of byInstant) {
-    const instant = lightAtInstant(scene, scene.blocks, input, atMs);
+    // What is drawn takes the whole scene; what is only judged takes what can shade a receptor.
+    const within = wanted.listed.length > 0 ? undefined : reach;
+    const instant = lightAtInstant(scene, scene.blocks, input, atMs, within);
     takeJudged(instant, wanted.judgedDates);
     for (const at of wanted.listed) {
       instants.push(studyInstant(at, instant, scene));
@@ -133,6 +142,19 @@ async function computeLight(
     })),
     shadows: inOrder(shadows),
     check,
+  };
+}
+
+/** The ground on which the receptors lie, and the lowest plane on which one is judged. */
+function reachOfReceptors({ receptors }: Scene, plans: readonly ClausePlan[]): Reach {
+  return {
+    box: receptors
+      .map(({ area }) => area.box)
+      .reduce(joinBoxes, { minX: Infinity, minY: Infinity, maxX: -Infinity, maxY: -Infinity }),
+    lowestPlaneM: [...receptors, ...plans.flatMap((plan) => plan.receptors)].reduce(
+      (lowest, { planeM }) => Math.min(lowest, planeM),
+      Infinity,
+    ),
   };
 }
 

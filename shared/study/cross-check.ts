@@ -1,5 +1,5 @@
 import type { Clipper } from '../shadow/clipper.ts';
-import { overlapAreaM2, type ShadowPolygons } from '../shadow/shadow-polygons.ts';
+import { overlapAreasM2, type ShadowPolygons } from '../shadow/shadow-polygons.ts';
 import type { StudyResults } from './evidence-schema.ts';
 import type { InstantLight } from './instant-light.ts';
 import { roundMeasure } from './rounding.ts';
@@ -22,14 +22,19 @@ export function crossCheckReceptors(
   polygons: ShadowPolygons,
   check: CrossCheck,
 ): void {
-  for (const receptor of scene.receptors) {
-    if (receptor.planeM !== 0) continue;
+  const shaded = scene.receptors.filter(
+    (receptor) => receptor.planeM === 0 && instant.lightOn(receptor, 0).netNewM2 >= leastNetNewM2,
+  );
+  const drawnM2 = overlapAreasM2(
+    clipper,
+    polygons.netNew,
+    shaded.map(({ area }) => area),
+  );
+  shaded.forEach((receptor, index) => {
     const { netNewM2 } = instant.lightOn(receptor, 0);
-    if (netNewM2 < leastNetNewM2) continue;
-    const drawnM2 = overlapAreaM2(clipper, polygons.netNew, receptor.area.rings);
-    const differenceM2 = roundMeasure(Math.abs(drawnM2 - netNewM2));
+    const differenceM2 = roundMeasure(Math.abs((drawnM2[index] ?? NaN) - netNewM2));
     if (differenceM2 > check.largestDifferenceM2) {
       Object.assign(check, { largestDifferenceM2: differenceM2, at, receptor: receptor.id });
     }
-  }
+  });
 }

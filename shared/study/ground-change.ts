@@ -1,5 +1,7 @@
-import { joinBoxes, type Box } from '../geometry/ring.ts';
+import { joinBoxes, type Box, type Ring } from '../geometry/ring.ts';
+import { makeLitArea } from '../shadow/receptor-light.ts';
 import type { ShadowLayer } from '../shadow/shadow-layer.ts';
+import { pointFromFrame, type SunFrame } from '../shadow/sun-frame.ts';
 import type { Scene } from './scene.ts';
 
 /**
@@ -17,15 +19,16 @@ export function areaChangesOnGround(
   if (first === undefined) return { netNewM2: 0, removedM2: 0 };
   const box = changing.reduce((joined, shadow) => joinBoxes(joined, shadow.box), first.box);
   // Context that stands on the ground lies in its own shadow, so only the site need be cut away.
-  const outsideSite = scene.siteRings.map((ring) => [...ring].reverse());
-  return scene.measures.light({ rings: [cornersOf(box), ...outsideSite], box }, layer);
+  const area = makeLitArea([cornersOf(box, layer.frame)], scene.siteRings);
+  return scene.measures.light(area, layer);
 }
 
-function cornersOf({ minX, minY, maxX, maxY }: Box): [number, number][] {
+/** A box of a sun's frame as a ring on the local plane. */
+function cornersOf({ minX, minY, maxX, maxY }: Box, frame: SunFrame): Ring {
   return [
-    [minX, minY],
-    [maxX, minY],
-    [maxX, maxY],
-    [minX, maxY],
+    pointFromFrame(minX, minY, frame),
+    pointFromFrame(maxX, minY, frame),
+    pointFromFrame(maxX, maxY, frame),
+    pointFromFrame(minX, maxY, frame),
   ];
 }

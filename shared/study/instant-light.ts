@@ -1,6 +1,11 @@
+import type { Box } from '../geometry/ring.ts';
+import { blocksTowardSun } from '../shadow/blocks-toward-sun.ts';
 import type { AreaLight } from '../shadow/receptor-light.ts';
-import { shadowVector } from '../shadow/shadow-contours.ts';
-import { castShadowLayer, type SceneBlock, type ShadowLayer } from '../shadow/shadow-layer.ts';
+import {
+  createShadowCaster,
+  type IndexedBlocks,
+  type ShadowLayer,
+} from '../shadow/shadow-layer.ts';
 import { sunPositionAt, type SunPosition } from '../solar/sun-position.ts';
 import type { StudyInput } from './evidence-schema.ts';
 import type { Scene, SceneReceptor } from './scene.ts';
@@ -14,35 +19,53 @@ export interface InstantLight {
   lightOn: (receptor: SceneReceptor, planeM: number) => AreaLight;
 }
 
+/** The part of a scene in which light is asked for. */
+export interface Reach {
+  box: Box;
+  lowestPlaneM: number;
+}
+
+interface Plane {
+  layer: ShadowLayer;
+  lights: Map<SceneReceptor, AreaLight>;
+}
+
 const noLight: AreaLight = { sunBeforeM2: 0, sunAfterM2: 0, netNewM2: 0, removedM2: 0 };
 
-/** Prepares one instant of a scene. With the sun down there is no light and no shadow. */
+/**
+ * Prepares one instant of a scene. With the sun down there is no light and no shadow.
+ *
+ * @param within the part of the scene that will be asked about; all of it when absent
+ */
 export function lightAtInstant(
   scene: Scene,
-  blocks: readonly SceneBlock[],
+  blocks: IndexedBlocks,
   input: Pick<StudyInput, 'place'>,
   atMs: number,
+  within?: Reach,
 ): InstantLight {
   const sun = sunPositionAt(atMs, input.place.longitude, input.place.latitude);
-  const isUp = sun.altitudeDeg > 0;
-  const layers = new Map<number, ShadowLayer>();
-  const lights = new Map<string, AreaLight>();
-  const layerOn = (planeM: number): ShadowLayer | null => {
-    if (!isUp) return null;
-    const layer = layers.get(planeM) ?? castShadowLayer(blocks, shadowVector(sun), planeM);
-    layers.set(planeM, layer);
-    return layer;
+  const standing = () =>
+    within === undefined ? blocks : blocksTowardSun(blocks, sun, within.box, within.lowestPlaneM);
+  const castOn = sun.altitudeDeg > 0 ? createShadowCaster(standing(), sun) : null;
+  const planes = new Map<number, Plane>();
+  const onPlane = (planeM: number) => {
+    if (castOn === null) return null;
+    const plane: Plane = planes.get(planeM) ?? { layer: castOn(planeM), lights: new Map() };
+    planes.set(planeM, plane);
+    return plane;
   };
   return {
     atMs,
     sun,
-    layerOn,
+    layerOn: (planeM) => onPlane(planeM)?.layer ?? null,
     lightOn: (receptor, planeM) => {
-      const layer = layerOn(planeM);
-      if (layer === null) return noLight;
-      const key = `${planeM} ${receptor.id}`;
-      const light = lights.get(key) ?? scene.measures.light(receptor.area, layer);
-      lights.set(key, light);
+      const plane = onPlane(planeM);
+      if (plane === null) return noLight;
+      const known = plane.lights.get(receptor);
+      if (known !== undefined) return known;
+      const light = scene.measures.light(receptor.area, plane.layer);
+      plane.lights.set(receptor, light);
       return light;
     },
   };

@@ -1,8 +1,8 @@
 import type { SunLedger } from '../receptors/sun-ledger-schema.ts';
 import { integrateHours, runsAbove, type Run, type SpanLight } from '../rules/day-light.ts';
 import { instantsOfSpan } from '../rules/rule-window.ts';
-import { shadowVector } from '../shadow/shadow-contours.ts';
-import { castShadowLayer } from '../shadow/shadow-layer.ts';
+import { blocksTowardSun } from '../shadow/blocks-toward-sun.ts';
+import { createShadowCaster } from '../shadow/shadow-layer.ts';
 import { formatInstant, wholeClockHours } from '../solar/civil-time.ts';
 import { keyDatesOfYear } from '../solar/key-dates.ts';
 import { sunAboveSpans } from '../solar/sun-above.ts';
@@ -42,12 +42,18 @@ export function computeReceptorLedger(
     stepMin,
     days: keyDatesOfYear(input.year, input.place.timezone).map(({ event, date }) => ({
       event,
-      ...ledgerDay(input, scene, receptor, date, stepMin),
+      ...computeLedgerDay(input, scene, receptor, date, stepMin),
     })),
   };
 }
 
-function ledgerDay(
+/**
+ * The account of one receptor of a scene on one civil date; see `computeReceptorLedger`.
+ *
+ * @param date `YYYY-MM-DD` on the clock of the place
+ * @param stepMin minutes between samples
+ */
+export function computeLedgerDay(
   input: StudyInput,
   scene: Scene,
   receptor: SceneReceptor,
@@ -123,13 +129,9 @@ function lightThrough(
     atMs,
     lights: atMs.map((at) => {
       const sun = sunPositionAt(at, input.place.longitude, input.place.latitude);
-      const layer = castShadowLayer(
-        scene.blocks,
-        shadowVector(sun),
-        receptor.planeM,
-        receptor.area.box,
-      );
-      return scene.measures.light(receptor.area, layer);
+      const { area, planeM } = receptor;
+      const standing = blocksTowardSun(scene.blocks, sun, area.box, planeM);
+      return scene.measures.light(area, createShadowCaster(standing, sun)(planeM));
     }),
     beamWm2: atMs.map((at) => beamOnReceptorWm2(at, receptor, sky, input)),
   };

@@ -1,3 +1,4 @@
+import { flattenRings } from '../geometry/flat-rings.ts';
 import type { Polygonal } from '../geometry/geojson-schema.ts';
 import { createLocalPlane, type LocalPlane } from '../geometry/local-plane.ts';
 import { projectPolygon } from '../geometry/project-polygon.ts';
@@ -9,7 +10,12 @@ import {
   type LightMeasures,
   type LitArea,
 } from '../shadow/receptor-light.ts';
-import type { SceneBlock, ShadowRole } from '../shadow/shadow-layer.ts';
+import {
+  indexBlocks,
+  type IndexedBlocks,
+  type SceneBlock,
+  type ShadowRole,
+} from '../shadow/shadow-layer.ts';
 import { createWindingSweep } from '../shadow/winding-sweep.ts';
 import type { EvidenceBlock, StudyInput } from './evidence-schema.ts';
 
@@ -34,9 +40,9 @@ export interface SceneReceptor {
 export interface Scene {
   plane: LocalPlane;
   /** Before is context and existing, after is context and proposed. */
-  blocks: SceneBlock[];
+  blocks: IndexedBlocks;
   /** The same with what is approved nearby standing in both; null where nothing is. */
-  cumulativeBlocks: SceneBlock[] | null;
+  cumulativeBlocks: IndexedBlocks | null;
   receptors: SceneReceptor[];
   siteRings: Ring[];
   measures: LightMeasures;
@@ -56,11 +62,11 @@ export function buildScene(input: StudyInput): Scene {
   const context = blocks.filter(({ role }) => role === 'context');
   return {
     plane,
-    blocks,
+    blocks: indexBlocks(blocks),
     cumulativeBlocks:
       approved.length === 0
         ? null
-        : [...blocks, ...approved.map((block) => standing(block, 'context'))],
+        : indexBlocks([...blocks, ...approved.map((block) => standing(block, 'context'))]),
     receptors: input.receptors.features.map(({ properties, geometry }) => {
       const rings = projectPolygon(geometry, plane);
       const area = makeLitArea(rings, siteRings);
@@ -98,12 +104,12 @@ export function buildScene(input: StudyInput): Scene {
 export function backwardAreaM2(geometry: Polygonal, plane: LocalPlane): number {
   const rings = projectPolygon(geometry, plane);
   const areas = new Float64Array(1);
-  createWindingSweep(1)(
-    [{ counter: 0, rings }],
-    boxOfRings(rings),
-    (windings) => ((windings[0] ?? 0) < 0 ? 0 : -1),
-    areas,
-  );
+  const sweep = createWindingSweep(1);
+  sweep.start(boxOfRings(rings));
+  // Each ring turned round, so that what wound backwards winds forwards.
+  const turnedRound = flattenRings(rings.map((ring) => ring.toReversed()));
+  for (const ring of turnedRound.rings) sweep.addRing(turnedRound.points, ring, 0);
+  sweep.measure(Int8Array.of(-1, 0), areas);
   return areas[0] ?? 0;
 }
 

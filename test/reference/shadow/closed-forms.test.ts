@@ -1,7 +1,8 @@
 import { describe, expect, it } from 'vitest';
 import { createLightMeasures, makeLitArea } from '../../../shared/shadow/receptor-light.ts';
-import { castBlockContours, shadowVector } from '../../../shared/shadow/shadow-contours.ts';
+import { castBlockContours } from '../../../shared/shadow/shadow-contours.ts';
 import { castShadowLayer, type SceneBlock } from '../../../shared/shadow/shadow-layer.ts';
+import { makeSunFrame } from '../../../shared/shadow/sun-frame.ts';
 import { makeBlock, makeRectangle } from '../../support/plane-scenes.ts';
 
 const measures = createLightMeasures();
@@ -9,7 +10,7 @@ const field = makeLitArea([makeRectangle(-500, -500, 1000, 1000)], []);
 
 /** The area in m² that blocks shade on a field much larger than their shadows. */
 function shadedM2(blocks: SceneBlock[], azimuthDeg: number, altitudeDeg: number, planeM = 0) {
-  const layer = castShadowLayer(blocks, shadowVector({ azimuthDeg, altitudeDeg }), planeM);
+  const layer = castShadowLayer(blocks, { azimuthDeg, altitudeDeg }, planeM);
   return 1_000_000 - measures.light(field, layer).sunAfterM2;
 }
 
@@ -35,7 +36,7 @@ describe('the shadow of', () => {
   it('a box at noon in the southern hemisphere falls to the south by the same area', () => {
     const box = makeBlock([makeRectangle(0, 0, 20, 10)], 0, 12);
     const south = makeLitArea([makeRectangle(0, -12, 20, 12)], []);
-    const layer = castShadowLayer([box], shadowVector({ azimuthDeg: 0, altitudeDeg: 45 }), 0);
+    const layer = castShadowLayer([box], { azimuthDeg: 0, altitudeDeg: 45 }, 0);
     expect(measures.light(south, layer).sunAfterM2).toBeCloseTo(0, 8);
     expect(shadedM2([box], 0, 45)).toBeCloseTo(20 * 22, 8);
   });
@@ -45,7 +46,7 @@ describe('the shadow of', () => {
     // From y = 30 to y = 10 + 33.
     expect(shadedM2([slab], 180, 45)).toBeCloseTo(20 * 13, 8);
     const under = makeLitArea([makeRectangle(0, 0, 20, 10)], []);
-    const layer = castShadowLayer([slab], shadowVector({ azimuthDeg: 180, altitudeDeg: 45 }), 0);
+    const layer = castShadowLayer([slab], { azimuthDeg: 180, altitudeDeg: 45 }, 0);
     expect(measures.light(under, layer).sunAfterM2).toBeCloseTo(200, 8);
   });
 
@@ -53,7 +54,7 @@ describe('the shadow of', () => {
     const ring = [makeRectangle(0, 0, 40, 40), makeRectangle(10, 10, 20, 20)];
     const block = makeBlock(ring, 0, 5);
     const yard = makeLitArea([makeRectangle(10, 10, 20, 20)], []);
-    const layer = castShadowLayer([block], shadowVector({ azimuthDeg: 180, altitudeDeg: 45 }), 0);
+    const layer = castShadowLayer([block], { azimuthDeg: 180, altitudeDeg: 45 }, 0);
     // The south wing shades 5 m of the 20 m deep yard.
     expect(measures.light(yard, layer).sunAfterM2).toBeCloseTo(20 * 15, 8);
   });
@@ -75,8 +76,8 @@ describe('the shadow of', () => {
   // 12 ft and 25 ft at 40.015° N, two hours from noon of the winter solstice: altitude 20.656°,
   // length 2.6525 heights (closed form, declination −23.44°): 31.83 ft and 66.31 ft.
   it('a wall two hours from noon at midwinter is 2.65 heights long', () => {
-    const { x, y } = shadowVector({ azimuthDeg: 150.643, altitudeDeg: 20.656 });
-    expect(Math.hypot(x, y) * 12).toBeCloseTo(31.83, 1);
-    expect(Math.hypot(x, y) * 25).toBeCloseTo(66.31, 1);
+    const { cotangent } = makeSunFrame({ azimuthDeg: 150.643, altitudeDeg: 20.656 });
+    expect(cotangent * 12).toBeCloseTo(31.83, 1);
+    expect(cotangent * 25).toBeCloseTo(66.31, 1);
   });
 });

@@ -2,7 +2,6 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { orientRing, type Ring } from '../../../shared/geometry/ring.ts';
 import { createLightMeasures, makeLitArea } from '../../../shared/shadow/receptor-light.ts';
-import { shadowVector } from '../../../shared/shadow/shadow-contours.ts';
 import { castShadowLayer, type SceneBlock } from '../../../shared/shadow/shadow-layer.ts';
 import { makeBlock, makeRandomTown, makeRectangle } from '../../support/plane-scenes.ts';
 import { createSeededRandom } from '../../support/seeded-random.ts';
@@ -25,7 +24,7 @@ function lightOf(
   sun: { azimuthDeg: number; altitudeDeg: number },
 ) {
   const area = makeLitArea([orientRing(ring, 'outer')], []);
-  return measures.light(area, castShadowLayer(blocks, shadowVector(sun), 0));
+  return measures.light(area, castShadowLayer(blocks, sun, 0));
 }
 
 const receptor = makeRectangle(-41, -33, 70, 52);
@@ -176,7 +175,7 @@ describe('the light on an area', () => {
       [makeRectangle(0, 0, 10, 10), [...makeRectangle(4, 4, 2, 2)].reverse()],
       [],
     );
-    const layer = castShadowLayer([], shadowVector({ azimuthDeg: 180, altitudeDeg: 30 }), 0);
+    const layer = castShadowLayer([], { azimuthDeg: 180, altitudeDeg: 30 }, 0);
     expect(measures.light(area, layer).sunAfterM2).toBeCloseTo(96, 9);
   });
 });

@@ -2,8 +2,9 @@ import { createLocalPlane } from '../../../shared/geometry/local-plane.ts';
 import { projectPolygon } from '../../../shared/geometry/project-polygon.ts';
 import { boxOfRings } from '../../../shared/geometry/ring.ts';
 import type { PlanePoint, Ring } from '../../../shared/geometry/ring.ts';
-import type { PlaneBlock, SunDirection } from '../../../shared/shadow/plane-block.ts';
+import type { PlaneBlock } from '../../../shared/shadow/plane-block.ts';
 import { castBlockContours } from '../../../shared/shadow/shadow-contours.ts';
+import type { SunDirection } from '../../../shared/shadow/sun-frame.ts';
 import { keyDatesOfYear, type KeyDate } from '../../../shared/solar/key-dates.ts';
 import type { DrawnBlock } from './drawn-block.ts';
 

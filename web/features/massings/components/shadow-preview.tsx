@@ -4,7 +4,7 @@ import type { Polygonal } from '../../../../shared/geometry/geojson-schema.ts';
 import { createLocalPlane } from '../../../../shared/geometry/local-plane.ts';
 import { projectPolygon } from '../../../../shared/geometry/project-polygon.ts';
 import { boxOfRings, joinBoxes } from '../../../../shared/geometry/ring.ts';
-import { shadowBox, shadowVector } from '../../../../shared/shadow/shadow-contours.ts';
+import { castBlockContours } from '../../../../shared/shadow/shadow-contours.ts';
 import { civilDateOf, formatInstant } from '../../../../shared/solar/civil-time.ts';
 import { sunPositionAt } from '../../../../shared/solar/sun-position.ts';
 import { ChoiceRow } from '../../../components/choice-row.tsx';
@@ -112,13 +112,12 @@ function reachOf(
   place: { longitude: number; latitude: number },
 ): PlaneExtent | null {
   const lowestDeg = Math.min(sheetAltitudeDeg, day.noonAltitudeDeg * sheetShareOfNoon);
-  const ways = day.curve
+  const suns = day.curve
     .map(({ atMs }) => sunPositionAt(atMs, place.longitude, place.latitude))
-    .filter(({ altitudeDeg }) => altitudeDeg > 0 && altitudeDeg >= lowestDeg)
-    .map(shadowVector);
+    .filter(({ altitudeDeg }) => altitudeDeg > 0 && altitudeDeg >= lowestDeg);
   const boxes = blocks.flatMap(({ block }) => [
     block.box,
-    ...ways.flatMap((along) => shadowBox(block, along, 0) ?? []),
+    ...suns.map((sun) => boxOfRings(castBlockContours(block, sun, 0))),
   ]);
   if (site !== null) {
     const plane = createLocalPlane(place.longitude, place.latitude);
