@@ -15,6 +15,7 @@ import {
 } from '../../shared/study/evidence-schema.ts';
 import { readStudyInput, type InputIssue } from '../../shared/study/read-study-input.ts';
 import { loadClipper } from '../clipper.ts';
+import { makePolygonsValid } from '../valid-polygons.ts';
 
 const exitCodes = { done: 0, different: 1, invalid: 2, lastDigits: 3, otherEngine: 4 } as const;
 
@@ -69,7 +70,7 @@ async function main(args: string[]): Promise<number> {
   const study = await computeStudy(read.input, { clipper: await loadClipper() });
   if (!shadows) return print(study.evidence);
   const { digest: _digest, results, ...rest } = study.evidence;
-  const instants = withShadows(results.instants, study.shadows);
+  const instants = await withShadows(results.instants, study.shadows);
   return print({ ...rest, results: { ...results, instants } });
 }
 
@@ -115,23 +116,32 @@ async function printInstant(input: StudyInput, at: string, shadows: boolean): Pr
     ...checked.input,
     engine: engineVersion,
     results: {
-      instants: shadows ? withShadows(light.instants, light.shadows) : light.instants,
+      instants: shadows ? await withShadows(light.instants, light.shadows) : light.instants,
       receptors: light.receptors,
     },
   });
 }
 
-/** Adds to each instant its polygons, or null with the sun down. */
-function withShadows(instants: readonly StudyInstant[], shadows: readonly InstantShadowPolygons[]) {
+/** Adds to each instant its polygons, valid ones, or null with the sun down. */
+async function withShadows(
+  instants: readonly StudyInstant[],
+  shadows: readonly InstantShadowPolygons[],
+) {
   const drawn = new Map(shadows.map((one) => [one.at, one]));
-  return instants.map((instant) => {
-    const found = drawn.get(instant.at);
-    const polygons =
-      found === undefined
-        ? null
-        : { before: found.before, after: found.after, netNew: found.netNew };
-    return { ...instant, shadows: polygons };
-  });
+  return Promise.all(
+    instants.map(async (instant) => {
+      const found = drawn.get(instant.at);
+      if (found === undefined) return { ...instant, shadows: null };
+      return {
+        ...instant,
+        shadows: {
+          before: await makePolygonsValid(found.before),
+          after: await makePolygonsValid(found.after),
+          netNew: await makePolygonsValid(found.netNew),
+        },
+      };
+    }),
+  );
 }
 
 type ReadJson = { ok: true; value: unknown } | { ok: false; issues: InputIssue[] };

@@ -1,5 +1,6 @@
-import type { MultiPolygon } from 'geojson';
+import type { MultiPolygon, Position } from 'geojson';
 import type { LocalPlane } from '../geometry/local-plane.ts';
+import type { Ring } from '../geometry/ring.ts';
 import type { Clipper } from '../shadow/clipper.ts';
 import {
   drawShadowPolygons,
@@ -31,28 +32,43 @@ export function drawInstant(
   const layer = instant.layerOn(0);
   if (layer === null) return null;
   const polygons = drawShadowPolygons(clipper, layer);
+  const toMultiPolygon = multiPolygonsOf(scene.plane);
   return {
     polygons,
     shadows: {
       at,
       ...instant.sun,
-      before: toMultiPolygon(polygons.before, scene.plane),
-      after: toMultiPolygon(polygons.after, scene.plane),
-      netNew: toMultiPolygon(polygons.netNew, scene.plane),
+      before: toMultiPolygon(polygons.before),
+      after: toMultiPolygon(polygons.after),
+      netNew: toMultiPolygon(polygons.netNew),
     },
   };
 }
 
-/** Closed rings of RFC 7946 with seven decimals, about a centimetre. */
-function toMultiPolygon(polygons: PlanePolygons, plane: LocalPlane): MultiPolygon {
-  const round = (degrees: number) => Math.round(degrees * 1e7) / 1e7;
-  return {
-    type: 'MultiPolygon',
-    coordinates: polygons.map((rings) =>
-      rings.map((ring) => {
-        const lngLats = ring.map((point) => plane.toLngLat(point).map(round));
-        return [...lngLats, ...lngLats.slice(0, 1)];
-      }),
-    ),
+/** The grid of drawn shadows: a hundred-millionth of a degree, about a millimetre. */
+export const degreesPerUnit = 1e-8;
+
+const unitsPerDegree = Math.round(1 / degreesPerUnit);
+
+/** Closed rings of RFC 7946 on that grid. What is the same before and after is projected once. */
+function multiPolygonsOf(plane: LocalPlane): (polygons: PlanePolygons) => MultiPolygon {
+  const round = (degrees: number) => Math.round(degrees * unitsPerDegree) / unitsPerDegree;
+  const known = new Map<Ring[], Position[][]>();
+  const toLngLats = (ring: Ring): Position[] => {
+    const lngLats = ring.map((point) => {
+      const [lng, lat] = plane.toLngLat(point);
+      return [round(lng), round(lat)];
+    });
+    const [first] = lngLats;
+    if (first !== undefined) lngLats.push(first);
+    return lngLats;
   };
+  return (polygons) => ({
+    type: 'MultiPolygon',
+    coordinates: polygons.map((rings) => {
+      const lngLats = known.get(rings) ?? rings.map(toLngLats);
+      known.set(rings, lngLats);
+      return lngLats;
+    }),
+  });
 }

@@ -1,21 +1,27 @@
 import type { MultiPolygon } from 'geojson';
 import type { InstantShadows, ShadowKind } from '../../../shared/contracts/studies.ts';
 import type { InstantShadowPolygons } from '../../../shared/study/draw-instant.ts';
+import { makePolygonsValid } from '../../valid-polygons.ts';
 
 const kinds: readonly ShadowKind[] = ['before', 'after', 'netNew'];
 
-/** The shadows of one instant as GeoJSON, one feature for each kind. */
-export function presentInstantShadows(drawn: InstantShadowPolygons): InstantShadows {
+/** The shadows of one instant as valid GeoJSON, one feature for each kind. */
+export async function presentInstantShadows(drawn: InstantShadowPolygons): Promise<InstantShadows> {
   return {
     type: 'FeatureCollection',
     at: drawn.at,
     azimuthDeg: drawn.azimuthDeg,
     altitudeDeg: drawn.altitudeDeg,
-    features: kinds.map((kind) => ({
-      type: 'Feature',
-      properties: { kind },
-      geometry: { type: 'MultiPolygon', coordinates: toLngLats(drawn[kind]) },
-    })),
+    features: await Promise.all(
+      kinds.map(async (kind) => ({
+        type: 'Feature' as const,
+        properties: { kind },
+        geometry: {
+          type: 'MultiPolygon' as const,
+          coordinates: toLngLats(await makePolygonsValid(drawn[kind])),
+        },
+      })),
+    ),
   };
 }
 

@@ -1,5 +1,6 @@
 import { LockMode } from '@mikro-orm/core';
 import type { EntityManager } from '@mikro-orm/postgresql';
+import type { InstantShadows } from '../../../shared/contracts/studies.ts';
 import type { ComputedStudy } from '../../../shared/study/compute-study.ts';
 import { listFindingRows } from './list-finding-rows.ts';
 import { presentInstantShadows } from './present-instant-shadows.ts';
@@ -13,7 +14,8 @@ export async function saveStudyResults(
   { studyId, claim }: StudyRun,
   { evidence, shadows }: ComputedStudy,
 ): Promise<boolean> {
-  const shadowsAt = new Map(shadows.map((drawn) => [drawn.at, presentInstantShadows(drawn)]));
+  const shadowsAt = new Map<string, InstantShadows>();
+  for (const drawn of shadows) shadowsAt.set(drawn.at, await presentInstantShadows(drawn));
   return em.transactional(async (tx) => {
     const study = await tx.findOne(
       Study,

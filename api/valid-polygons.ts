@@ -1,0 +1,44 @@
+import type { Geometry, MultiPolygon, Position } from 'geojson';
+import { degreesPerUnit } from '../shared/study/draw-instant.ts';
+import { loadGeos, type Geos } from './geos.ts';
+
+let starting: Promise<Geos> | undefined;
+
+/**
+ * The same polygons, valid by OGC's rules, for whoever takes them out of the program. Rounding to a
+ * millimetre can make borders cross that only came near each other; GEOS finds such places and
+ * mends them on the same grid. Most polygons come back as they are.
+ *
+ * @throws when GEOS can make nothing of them
+ */
+export async function makePolygonsValid(polygons: MultiPolygon): Promise<MultiPolygon> {
+  starting ??= loadGeos();
+  const geos = await starting;
+  const drawn = geos.read(polygons);
+  try {
+    if (geos.GEOSisValid(drawn) === 1) return polygons;
+    const mended = geos.GEOSMakeValid(drawn);
+    const onGrid = mended === 0 ? 0 : geos.GEOSGeom_setPrecision(mended, degreesPerUnit, 0);
+    if (mended !== 0) geos.GEOSGeom_destroy(mended);
+    if (onGrid === 0) throw new Error('GEOS could not make the shadows valid.');
+    const result = geos.write(onGrid);
+    geos.GEOSGeom_destroy(onGrid);
+    return { type: 'MultiPolygon', coordinates: polygonsOf(result) };
+  } finally {
+    geos.GEOSGeom_destroy(drawn);
+  }
+}
+
+/** The polygons among what is left: where two borders fell together, a line may stand beside them. */
+function polygonsOf(geometry: Geometry): Position[][][] {
+  switch (geometry.type) {
+    case 'Polygon':
+      return [geometry.coordinates];
+    case 'MultiPolygon':
+      return geometry.coordinates;
+    case 'GeometryCollection':
+      return geometry.geometries.flatMap(polygonsOf);
+    default:
+      return [];
+  }
+}
