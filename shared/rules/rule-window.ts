@@ -1,5 +1,5 @@
 import { civilClockToMs, standardClockToMs } from '../solar/civil-time.ts';
-import { solarClockToMs } from '../solar/solar-time.ts';
+import { solarClockToMs, solarDateOf } from '../solar/solar-time.ts';
 import { sunAboveSpans, type TimeSpan } from '../solar/sun-above.ts';
 import type { Place } from './place.ts';
 import type { RuleClause, RuleWindow } from './rule-schema.ts';
@@ -75,7 +75,8 @@ function clockToMs(
     case 'standard':
       return standardClockToMs(date, clock, place.timezone);
     case 'solar': {
-      const atMs = solarClockToMs(date, clock, place.longitude, place.latitude);
+      const solarDate = solarDateOf(date, place.timezone, place.longitude);
+      const atMs = solarClockToMs(solarDate, clock, place.longitude, place.latitude);
       return Math.round(atMs / 1000) * 1000;
     }
   }

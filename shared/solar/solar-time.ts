@@ -1,4 +1,5 @@
 import { Body, HourAngle, Observer } from 'astronomy-engine';
+import { civilDayBounds } from './civil-time.ts';
 
 const dayMs = 86_400_000;
 
@@ -9,6 +10,17 @@ const dayMs = 86_400_000;
 export function trueSolarHours(atMs: number, longitude: number, latitude: number): number {
   const hourAngleHours = HourAngle(Body.Sun, new Date(atMs), new Observer(latitude, longitude, 0));
   return (hourAngleHours + 12) % 24;
+}
+
+/**
+ * The solar day whose noon falls on a civil date. The two differ only where a zone's clock is half a
+ * day or more from its meridian, as east of the date line.
+ */
+export function solarDateOf(date: string, timeZone: string, longitude: number): string {
+  const { startMs, endMs } = civilDayBounds(date, timeZone);
+  const noonMs = Date.parse(`${date}T12:00:00Z`) - (longitude / 360) * dayMs;
+  const days = noonMs < startMs ? 1 : noonMs >= endMs ? -1 : 0;
+  return new Date(Date.parse(date) + days * dayMs).toISOString().slice(0, 10);
 }
 
 /**
