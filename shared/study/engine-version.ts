@@ -1,2 +1,2 @@
 /** Raised whenever the same input can give other figures. */
-export const engineVersion = '1.0.0';
+export const engineVersion = '1.1.0';
