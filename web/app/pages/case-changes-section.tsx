@@ -18,9 +18,8 @@ import { StudySheet } from '../../features/studies/components/study-sheet.tsx';
 import { SunLosersTable } from '../../features/studies/components/sun-losers-table.tsx';
 import { wordOfClass } from '../../features/studies/receptor-words.ts';
 import { receptorsAtSameAddress } from '../../features/studies/same-address.ts';
-import { listSunLosers } from '../../features/studies/sun-losers.ts';
+import { useStudyLook } from '../../features/studies/use-study-look.ts';
 import type { MapPin } from '../../map/map-features.ts';
-import { useStudyView } from '../../map/use-study-view.ts';
 import type { ChosenPlace } from './use-chosen-place.ts';
 
 export interface CaseChangesSectionProps {
@@ -82,11 +81,7 @@ interface ChangesProps extends StudyContentsProps {
 const tableId = 'who-loses-sun';
 
 function Changes({ reviewCase, study, place, pins, evidence, rows }: ChangesProps) {
-  const view = useStudyView(study);
-  const losers = useMemo(
-    () => listSunLosers(evidence, rows, view.date),
-    [evidence, rows, view.date],
-  );
+  const look = useStudyLook(study, evidence, rows);
   return (
     <div className="grid gap-x-10 gap-y-8 lg:grid-cols-[minmax(0,5fr)_minmax(0,7fr)]">
       <div className="grid content-start gap-6">
@@ -104,7 +99,7 @@ function Changes({ reviewCase, study, place, pins, evidence, rows }: ChangesProp
         site={reviewCase.site}
         evidence={evidence}
         rows={rows}
-        view={view}
+        look={look}
         chosen={place.receptor}
         onChoose={place.choose}
         pins={pins}
@@ -112,10 +107,9 @@ function Changes({ reviewCase, study, place, pins, evidence, rows }: ChangesProp
       />
       <section id={tableId} aria-label="Who loses sun" className="scroll-mt-4 lg:col-span-2">
         <SunLosersTable
-          key={view.date}
+          key={look.view.date}
           studyId={study.id}
-          day={view.day}
-          losers={losers}
+          look={look}
           receptorCount={evidence.results.receptors.length}
           chosen={place.receptor}
           onChoose={place.choose}

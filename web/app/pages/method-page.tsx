@@ -3,6 +3,7 @@ import { PageHeading } from '../../components/page-heading.tsx';
 import { usePlace } from '../../lib/place-context.ts';
 import { paths } from '../paths.ts';
 import { MethodSection } from './method-section.tsx';
+import { SunOfPlace } from './sun-of-place.tsx';
 
 /** How sun and shadows are computed, what is left out, and where the methods come from. */
 export function MethodPage() {
@@ -23,10 +24,22 @@ export function MethodPage() {
           {formats.number(Math.abs(municipality.latitude), 2)}°{' '}
           {municipality.latitude >= 0 ? 'north' : 'south'},{' '}
           {formats.number(Math.abs(municipality.longitude), 2)}°{' '}
-          {municipality.longitude >= 0 ? 'east' : 'west'}) and for the instant, to about two
-          hundredths of a degree. Its direction is counted clockwise from true north. Its height
-          above the horizon is the one that an eye sees, with the bending of light in the standard
-          atmosphere.
+          {municipality.longitude >= 0 ? 'east' : 'west'}) and for the instant. Its direction is
+          counted clockwise from true north. Its height above the horizon is the one that an eye
+          sees: with the bending of light in air of 1010 hPa and 10 °C, the same everywhere.
+        </p>
+        <p>
+          The formulas are those of the open library suncalc, because they are fast enough to follow
+          a hand on the screen. Held against a second library, astronomy-engine, at thousands of
+          instants from 1990 to 2060 and up to 65° of latitude, the height is off by 0.003° in the
+          mean and 0.014° at most, the direction by no more. A hundredth of a degree moves the tip
+          of a 10 m pole’s shadow by 6 cm when the sun is 10° high.
+        </p>
+        <SunOfPlace />
+        <p>
+          In this table the sun rises and sets as in an almanac: with the upper edge of its disc. A
+          study counts from the moment when the middle of the disc stands on a level horizon, a
+          minute or two later at middle latitudes, until it stands there again.
         </p>
         <p>
           Key dates are the civil days on which the equinoxes and solstices of the year fall. Times
@@ -64,8 +77,9 @@ export function MethodPage() {
           loses the sun.
         </p>
         <p>
-          The areas are computed by two different ways, and every study records the largest
-          difference between them.
+          The areas are computed in two ways that share nothing but the blocks: by adding up narrow
+          strips of each place, and from the outlines that are drawn on the map. Every study records
+          the largest difference between the two; it is well below a hundredth of a square metre.
         </p>
       </MethodSection>
 
@@ -122,7 +136,8 @@ export function MethodPage() {
         <ul className="grid list-disc gap-1.5 ps-5">
           <li>
             Sun position, refraction: J. Meeus, <cite>Astronomical Algorithms</cite>, 2nd edition,
-            1998. Equinoxes, solstices and solar time: the open library astronomy-engine.
+            1998, by the open library suncalc. Equinoxes, solstices, sunrise and solar time: the
+            open library astronomy-engine.
           </li>
           <li>
             Direct sunlight under a clear sky: P. Ineichen and R. Perez, “A new airmass independent
