@@ -68,6 +68,8 @@ function ArcDrawing({
   const x = xOfInstant(frame, atMs);
   const y = yOfAltitude(frame, Math.max(0, altitudeDeg));
 
+  const isJudged = windows.some(({ fromMs, toMs }) => fromMs <= atMs && atMs <= toMs);
+
   const followPointer = (event: PointerEvent<SVGSVGElement>) => {
     const left = drawing.current?.getBoundingClientRect().left ?? 0;
     onChange(snapToStep(steps, instantOfX(frame, event.clientX - left)));
@@ -117,7 +119,7 @@ function ArcDrawing({
         aria-valuemin={toMinutes(steps.firstMs - day.startMs)}
         aria-valuemax={toMinutes(steps.lastMs - day.startMs)}
         aria-valuenow={toMinutes(atMs - day.startMs)}
-        aria-valuetext={`${formats.clockWithZone(atText(atMs))}, sun ${formats.angle(altitudeDeg)} high`}
+        aria-valuetext={`${formats.clockWithZone(atText(atMs))}, sun ${formats.angle(altitudeDeg)} high${isJudged ? ', an hour that the rule judges' : ''}`}
         className="group outline-none"
         onKeyDown={(event) => {
           const nextMs = moveByKey(steps, atMs, event.key);

@@ -69,7 +69,9 @@ export function useStudyView(study: StudyDays) {
     layer: view.layer,
     receptor: view.receptor,
     atMs,
-    /** The instant to fetch shadows for, RFC 3339; null where the sun stays down. */
+    /** The instant, RFC 3339; null where the sun stays down. */
+    at: steps === null ? null : formatInstant(atMs, study.timeZone),
+    /** The same once the handle rests. */
     askedAt: steps === null ? null : formatInstant(askedMs, study.timeZone),
     change,
     setInstant,

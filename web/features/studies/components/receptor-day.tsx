@@ -1,6 +1,6 @@
 import type { ReceptorDetail } from '../../../../shared/contracts/studies.ts';
+import type { LedgerDay } from '../../../../shared/receptors/sun-ledger-schema.ts';
 import { useFormats } from '../../../lib/place-context.ts';
-import { ledgerDayOf } from '../ledger-day.ts';
 import { wordOfClass } from '../receptor-words.ts';
 import { describeLedgerDay } from '../sun-sentence.ts';
 import { FindingLines } from './finding-lines.tsx';
@@ -9,14 +9,14 @@ import { Sentence } from './sentence.tsx';
 
 export interface ReceptorDayProps {
   detail: ReceptorDetail;
-  date: string;
+  /** Its account of the chosen day; null while there is none. */
+  day: LedgerDay | null;
 }
 
 /** The chosen receptor on the chosen day: a sentence, what the rule says, and the ledger hour by hour. */
-export function ReceptorDay({ detail, date }: ReceptorDayProps) {
+export function ReceptorDay({ detail, day }: ReceptorDayProps) {
   const formats = useFormats();
   const { ledger, findings } = detail;
-  const day = ledgerDayOf(ledger, date);
   return (
     <section className="grid gap-3" aria-label={`${ledger.label}, ${wordOfClass(ledger.class)}`}>
       <div className="say">
@@ -25,7 +25,7 @@ export function ReceptorDay({ detail, date }: ReceptorDayProps) {
             {ledger.label}, {wordOfClass(ledger.class)}.
           </strong>{' '}
           {day === null ? (
-            `The sun ledger holds the four key dates; choose one of them to read this one’s account.`
+            'Its sun ledger holds the four key dates.'
           ) : (
             <Sentence parts={describeLedgerDay(day, ledger.class, formats)} />
           )}

@@ -1,12 +1,11 @@
-import { useMemo } from 'react';
 import type { FindingRow, StudyDetail } from '../../../../shared/contracts/studies.ts';
 import type { Polygonal } from '../../../../shared/geometry/geojson-schema.ts';
 import { Loading } from '../../../components/loading.tsx';
 import { ProblemNotice } from '../../../components/problem-notice.tsx';
-import { useStudyView } from '../../../map/use-study-view.ts';
 import { useReceptor } from '../api/get-receptor.ts';
 import type { DrawnEvidence } from '../api/get-study-evidence.ts';
-import { listSunLosers } from '../sun-losers.ts';
+import { useReceptorDay } from '../use-receptor-day.ts';
+import { useStudyLook } from '../use-study-look.ts';
 import { ReceptorDay } from './receptor-day.tsx';
 import { StudyDownloads } from './study-downloads.tsx';
 import { StudySheet } from './study-sheet.tsx';
@@ -25,11 +24,12 @@ const tableId = 'who-loses-sun';
 
 /** A finished study to look at hour by hour: the map over the sun arc, and who loses sun beside it. */
 export function StudyExplorer({ study, site, evidence, rows }: StudyExplorerProps) {
-  const view = useStudyView(study);
-  const { date, day, change } = view;
-  const losers = useMemo(() => listSunLosers(evidence, rows, date), [evidence, rows, date]);
-  const chosen = view.receptor ?? losers[0]?.receptor ?? null;
+  const look = useStudyLook(study, evidence, rows);
+  const { view, live, losers } = look;
+  const { date, change } = view;
+  const chosen = view.receptor ?? losers?.[0]?.receptor ?? null;
   const receptor = useReceptor(study.id, chosen);
+  const receptorDay = useReceptorDay(live, study.id, chosen, date);
 
   return (
     <div className="grid gap-x-8 gap-y-6 lg:grid-cols-[minmax(0,8fr)_minmax(0,5fr)]">
@@ -38,7 +38,7 @@ export function StudyExplorer({ study, site, evidence, rows }: StudyExplorerProp
         site={site}
         evidence={evidence}
         rows={rows}
-        view={view}
+        look={look}
         chosen={chosen}
         onChoose={(next) => change({ receptor: next })}
         tableId={tableId}
@@ -47,15 +47,16 @@ export function StudyExplorer({ study, site, evidence, rows }: StudyExplorerProp
         <SunLosersTable
           key={date}
           studyId={study.id}
-          day={day}
-          losers={losers}
+          look={look}
           receptorCount={evidence.results.receptors.length}
           chosen={chosen}
           onChoose={(next) => change({ receptor: next })}
         />
         {receptor.isError ? <ProblemNotice error={receptor.error} /> : null}
         {chosen !== null && receptor.isPending ? <Loading what="the sun ledger" /> : null}
-        {receptor.data === undefined ? null : <ReceptorDay detail={receptor.data} date={date} />}
+        {receptor.data === undefined ? null : (
+          <ReceptorDay detail={receptor.data} day={receptorDay} />
+        )}
         <StudyDownloads studyId={study.id} />
       </section>
     </div>

@@ -7,13 +7,16 @@ import { ProblemNotice } from '../../../components/problem-notice.tsx';
 import { useFormats, usePlace } from '../../../lib/place-context.ts';
 import type { ShadowLayer } from '../../../map/case-layers.ts';
 import type { MapPin } from '../../../map/map-features.ts';
+import { PlayDay } from '../../../map/play-day.tsx';
 import { SunArc } from '../../../map/sun-arc.tsx';
-import type { useStudyView } from '../../../map/use-study-view.ts';
-import { useReceptor } from '../api/get-receptor.ts';
-import { useShadows } from '../api/get-shadows.ts';
 import type { DrawnEvidence } from '../api/get-study-evidence.ts';
-import { ledgerDayOf, samplesOf } from '../ledger-day.ts';
+import { samplesOf } from '../ledger-day.ts';
+import { useInstantShadows, type ShownShadows } from '../live/use-instant-shadows.ts';
+import { useReceptorDay } from '../use-receptor-day.ts';
+import type { StudyLook } from '../use-study-look.ts';
 import { DateChoice } from './date-choice.tsx';
+import { JudgedHoursNote } from './judged-hours-note.tsx';
+import { MapKey } from './map-key.tsx';
 import { StudyMap } from './study-map.tsx';
 
 export interface StudySheetProps {
@@ -23,8 +26,8 @@ export interface StudySheetProps {
   evidence: DrawnEvidence;
   /** Every finding of the study. */
   rows: readonly FindingRow[];
-  /** Date, instant and layer, as the address has them. */
-  view: ReturnType<typeof useStudyView>;
+  /** Date, instant and layer, as the address has them, and the engine that draws them. */
+  look: StudyLook;
   chosen: string | null;
   /** A receptor and the place at which the person pointed. */
   onChoose: (receptor: string, lngLat: LngLat) => void;
@@ -45,7 +48,7 @@ export function StudySheet({
   site,
   evidence,
   rows,
-  view,
+  look,
   chosen,
   onChoose,
   pins,
@@ -53,13 +56,13 @@ export function StudySheet({
 }: StudySheetProps) {
   const formats = useFormats();
   const { municipality } = usePlace();
-  const { date, day, steps, atMs, askedAt, layer, change } = view;
-  const shadows = useShadows(study.id, askedAt);
-  const receptor = useReceptor(study.id, chosen);
-  const ledgerDay = ledgerDayOf(receptor.data?.ledger, date);
+  const { view, live } = look;
+  const { date, day, steps, atMs, at, askedAt, layer, change } = view;
+  const shown = useInstantShadows(live, study.id, at, askedAt);
+  const ledgerDay = useReceptorDay(live, study.id, chosen, date);
   const samples = useMemo(() => (ledgerDay === null ? null : samplesOf(ledgerDay)), [ledgerDay]);
   const sun = sunPositionAt(atMs, municipality.longitude, municipality.latitude);
-  const isDrawn = shadows.data !== undefined && Date.parse(shadows.data.at) === atMs;
+  const isDrawn = shown.shadows !== null && Date.parse(shown.shadows.at) === atMs;
 
   return (
     <section aria-label="Map and time of day" className="grid content-start gap-3">
@@ -74,7 +77,7 @@ export function StudySheet({
         site={site}
         evidence={evidence}
         rows={rows}
-        shadows={steps === null ? null : (shadows.data ?? null)}
+        shadows={steps === null ? null : shown.shadows}
         layer={layer}
         chosen={chosen}
         onChoose={onChoose}
@@ -85,29 +88,39 @@ export function StudySheet({
         value={date}
         onChange={(next) => change({ date: next })}
       />
+      <JudgedHoursNote windows={view.windows} />
       {steps === null ? (
         <p>The sun does not rise on {formats.date(date)}.</p>
       ) : (
-        <SunArc
-          day={day}
-          steps={steps}
-          atMs={atMs}
-          altitudeDeg={sun.altitudeDeg}
-          onChange={view.setInstant}
-          windows={view.windows}
-          samples={samples}
-        />
+        <>
+          <SunArc
+            day={day}
+            steps={steps}
+            atMs={atMs}
+            altitudeDeg={sun.altitudeDeg}
+            onChange={view.setInstant}
+            windows={view.windows}
+            samples={samples}
+          />
+          <PlayDay
+            key={date}
+            steps={steps}
+            atMs={atMs}
+            isDrawn={isDrawn}
+            onChange={view.setInstant}
+          />
+          <p role="status" className="min-h-5 text-small text-ink-soft">
+            {describeDrawing(study, shown, askedAt, formats)}
+          </p>
+        </>
       )}
-      <p role="status" className="min-h-5 text-small text-ink-soft">
-        {shadows.isError
-          ? ''
-          : isDrawn
-            ? describeNetNew(study, shadows.data.at, formats)
-            : 'Drawing …'}
-      </p>
-      {shadows.isError ? (
-        <ProblemNotice error={shadows.error} onRetry={() => void shadows.refetch()} />
+      {live.status === 'unavailable' ? (
+        <p className="measure say text-small">
+          This browser could not start the drawing engine. The shadows come from the server instead:
+          they follow when the handle rests.
+        </p>
       ) : null}
+      {shown.error === null ? null : <ProblemNotice error={shown.error} onRetry={shown.onRetry} />}
       <MapKey />
       <p className="text-small">
         Point at a receptor to read its account, or choose it in{' '}
@@ -120,42 +133,19 @@ export function StudySheet({
   );
 }
 
-function describeNetNew(
+/** What the proposal shades anew, once the handle rests and its shadows are drawn. */
+function describeDrawing(
   study: StudyDetail,
-  at: string,
+  { shadows, netNewM2, error }: ShownShadows,
+  askedAt: string | null,
   formats: ReturnType<typeof useFormats>,
 ): string {
-  const instant = study.instants.find((one) => Date.parse(one.at) === Date.parse(at));
-  if (instant === undefined || instant.netNewM2 === null) return '';
-  return `At ${formats.clockWithZone(at)} the proposal shades ${formats.area(instant.netNewM2)} of ground anew.`;
-}
-
-/** What the map's signs mean. */
-function MapKey() {
-  return (
-    <ul className="flex flex-wrap gap-x-5 gap-y-1 text-small" aria-label="Key of the map">
-      <li className="flex items-center gap-1.5">
-        <span aria-hidden="true" className="inline-block h-3 w-4 border border-slate bg-slate/35" />
-        shadow
-      </li>
-      <li className="flex items-center gap-1.5">
-        <span aria-hidden="true" className="hatched inline-block h-3 w-4 border border-madder" />
-        net new shadow
-      </li>
-      <li className="flex items-center gap-1.5">
-        <span aria-hidden="true" className="inline-block h-3 w-4 border-2 border-ink bg-sheet" />
-        proposal
-      </li>
-      <li className="flex items-center gap-1.5">
-        <span aria-hidden="true" className="font-strong text-madder">
-          ✕
-        </span>
-        rule not met
-      </li>
-      <li className="flex items-center gap-1.5">
-        <span aria-hidden="true" className="inline-block h-3 w-4 border-2 border-marigold" />
-        chosen receptor
-      </li>
-    </ul>
-  );
+  if (error !== null) return '';
+  if (shadows === null || askedAt === null || Date.parse(shadows.at) !== Date.parse(askedAt)) {
+    return 'Drawing …';
+  }
+  const listed = study.instants.find((one) => Date.parse(one.at) === Date.parse(shadows.at));
+  const areaM2 = listed?.netNewM2 ?? netNewM2;
+  if (areaM2 === null) return '';
+  return `At ${formats.clockWithZone(shadows.at)} the proposal shades ${formats.area(areaM2)} of ground anew.`;
 }

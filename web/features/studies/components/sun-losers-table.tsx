@@ -1,61 +1,72 @@
 import { useQueries } from '@tanstack/react-query';
 import { useState } from 'react';
-import type { ReceptorDetail } from '../../../../shared/contracts/studies.ts';
+import type { LedgerDay } from '../../../../shared/receptors/sun-ledger-schema.ts';
 import { Button } from '../../../components/button.tsx';
 import { DataTable, type TableColumn } from '../../../components/data-table.tsx';
 import { FindingMark } from '../../../components/finding-mark.tsx';
+import { Loading } from '../../../components/loading.tsx';
 import type { Formats } from '../../../lib/formats.ts';
 import { useFormats } from '../../../lib/place-context.ts';
 import type { SunDay } from '../../../map/sun-day.ts';
 import { getReceptorQueryOptions } from '../api/get-receptor.ts';
 import { ledgerDayOf, samplesOf } from '../ledger-day.ts';
+import { useLiveDays } from '../live/use-live-days.ts';
 import { wordOfClass } from '../receptor-words.ts';
 import type { SunLoser } from '../sun-losers.ts';
+import type { StudyLook } from '../use-study-look.ts';
 import { DayBands } from './day-bands.tsx';
 
 export interface SunLosersTableProps {
   studyId: string;
-  day: SunDay;
-  losers: readonly SunLoser[];
+  look: StudyLook;
   receptorCount: number;
   chosen: string | null;
   onChoose: (receptor: string) => void;
 }
 
 interface LoserRow extends SunLoser {
-  detail: ReceptorDetail | undefined;
+  /** Its account of the day; null while it is not there. */
+  ledgerDay: LedgerDay | null;
 }
 
 const shownAtFirst = 6;
 const shownMore = 20;
 
 /** Who loses sun on the chosen day: where the rule is not met first, then by the hours lost. */
-export function SunLosersTable({
-  studyId,
-  day,
-  losers,
-  receptorCount,
-  chosen,
-  onChoose,
-}: SunLosersTableProps) {
+export function SunLosersTable(props: SunLosersTableProps) {
   const formats = useFormats();
+  const { view, live, losers } = props.look;
+  const title = `Who loses sun on ${formats.dayOfYear(view.date)}`;
+  if (losers !== null && losers.length > 0) {
+    return <Losers {...props} title={title} losers={losers} />;
+  }
+  return (
+    <div className="grid gap-1">
+      <h2>{title}</h2>
+      {losers !== null ? (
+        <p>No receptor loses sun on this day.</p>
+      ) : live.status === 'unavailable' ? (
+        <p>The study lists the four key dates. Choose one of them to see who loses sun.</p>
+      ) : (
+        <Loading what="who loses sun" />
+      )}
+    </div>
+  );
+}
+
+interface LosersProps extends SunLosersTableProps {
+  title: string;
+  losers: readonly SunLoser[];
+}
+
+function Losers({ studyId, look, title, losers, receptorCount, chosen, onChoose }: LosersProps) {
+  const formats = useFormats();
+  const { day } = look.view;
   const [shownCount, setShownCount] = useState(shownAtFirst);
   const shown = losers.slice(0, shownCount);
-  const details = useQueries({
-    queries: shown.map(({ receptor }) => getReceptorQueryOptions(studyId, receptor)),
-  });
-  const title = `Who loses sun on ${formats.dayOfYear(day.date)}`;
-  if (losers.length === 0) {
-    return (
-      <div className="grid gap-1">
-        <h2>{title}</h2>
-        <p>No receptor loses sun on this day.</p>
-      </div>
-    );
-  }
+  const days = useDaysOf(look, studyId, shown);
   const rows = inOrderOfLedgers(
-    shown.map((loser, index): LoserRow => ({ ...loser, detail: details[index]?.data })),
-    day.date,
+    shown.map((loser, index): LoserRow => ({ ...loser, ledgerDay: days[index] ?? null })),
   );
   const untouched = receptorCount - losers.length;
   const hidden = losers.length - rows.length;
@@ -88,14 +99,35 @@ export function SunLosersTable({
   );
 }
 
+/** The accounts of the shown receptors: from the engine beside the page, else from the server. */
+function useDaysOf(
+  { view: { date }, live }: StudyLook,
+  studyId: string,
+  shown: readonly SunLoser[],
+): (LedgerDay | null | undefined)[] {
+  const computed = useLiveDays(
+    live,
+    studyId,
+    shown.map(({ receptor }) => receptor),
+    date,
+  );
+  const isFromServer = live.status === 'unavailable';
+  const fetched = useQueries({
+    queries: shown.map(({ receptor }) => ({
+      ...getReceptorQueryOptions(studyId, receptor),
+      enabled: isFromServer,
+    })),
+  });
+  return isFromServer ? fetched.map(({ data }) => ledgerDayOf(data?.ledger, date)) : computed;
+}
+
 /** Once every ledger is there its figures give the order; until then the hourly shares do. */
-function inOrderOfLedgers(rows: readonly LoserRow[], date: string): LoserRow[] {
-  const lostOf = (row: LoserRow) => ledgerDayOf(row.detail?.ledger, date)?.sunHours.lost;
-  if (rows.some((row) => lostOf(row) === undefined)) return [...rows];
+function inOrderOfLedgers(rows: readonly LoserRow[]): LoserRow[] {
+  if (rows.some(({ ledgerDay }) => ledgerDay === null)) return [...rows];
+  const lostOf = ({ ledgerDay }: LoserRow) => ledgerDay?.sunHours.lost ?? 0;
   return rows.toSorted(
     (a, b) =>
-      Number(b.finding === 'not-met') - Number(a.finding === 'not-met') ||
-      (lostOf(b) ?? 0) - (lostOf(a) ?? 0),
+      Number(b.finding === 'not-met') - Number(a.finding === 'not-met') || lostOf(b) - lostOf(a),
   );
 }
 
@@ -131,32 +163,26 @@ function loserColumns(
       id: 'bands',
       header: `${clock(fromMs)} – ${clock(toMs)}, before over after`,
       className: 'sm:w-40',
-      cell: (row) => {
-        const ledgerDay = ledgerDayOf(row.detail?.ledger, day.date);
-        return (
-          <DayBands
-            samples={ledgerDay === null ? row.hourly : samplesOf(ledgerDay)}
-            fromMs={fromMs}
-            toMs={toMs}
-          />
-        );
-      },
+      cell: ({ ledgerDay, hourly }) => (
+        <DayBands
+          samples={ledgerDay === null ? hourly : samplesOf(ledgerDay)}
+          fromMs={fromMs}
+          toMs={toMs}
+        />
+      ),
     },
     {
       id: 'lost',
       header: 'Lost that day',
       className: 'whitespace-nowrap',
-      cell: (row) => {
-        const ledgerDay = ledgerDayOf(row.detail?.ledger, day.date);
-        return (
-          <>
-            {ledgerDay === null ? '…' : formats.hours(ledgerDay.sunHours.lost)}
-            <span className="block sm:hidden">
-              <LoserFinding row={row} />
-            </span>
-          </>
-        );
-      },
+      cell: (row) => (
+        <>
+          {row.ledgerDay === null ? '…' : formats.hours(row.ledgerDay.sunHours.lost)}
+          <span className="block sm:hidden">
+            <LoserFinding row={row} />
+          </span>
+        </>
+      ),
     },
     {
       id: 'finding',
