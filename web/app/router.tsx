@@ -1,5 +1,6 @@
 import { createBrowserRouter } from 'react-router-dom';
 import { Loading } from '../components/loading.tsx';
+import { designRoutes } from './design/design-routes.ts';
 import { deskCaseRoutes, deskRoutes } from './desk-routes.ts';
 import { AppLayout } from './layouts/app-layout.tsx';
 import { RequireRole } from './layouts/require-role.tsx';
@@ -84,6 +85,7 @@ export const router = createBrowserRouter([
             element: <RequireRole roles={['planner', 'administrator']} />,
             children: deskRoutes,
           },
+          ...designRoutes,
           { path: '*', element: <NotFoundPage /> },
         ],
       },
