@@ -19,3 +19,24 @@ export const multiPolygonSchema = z.strictObject({
 /** A footprint, a parcel or a shadow: RFC 7946, longitude and latitude. */
 export const polygonalSchema = z.discriminatedUnion('type', [polygonSchema, multiPolygonSchema]);
 export type Polygonal = z.infer<typeof polygonalSchema>;
+
+export const pointSchema = z.strictObject({ type: z.literal('Point'), coordinates: lngLatSchema });
+
+export const lineStringSchema = z.strictObject({
+  type: z.literal('LineString'),
+  coordinates: z.array(lngLatSchema).min(2),
+});
+
+/** What may be judged: an area, or a window as a point or a line. */
+export const receptorGeometrySchema = z.discriminatedUnion('type', [
+  polygonSchema,
+  multiPolygonSchema,
+  pointSchema,
+  lineStringSchema,
+]);
+export type ReceptorGeometry = z.infer<typeof receptorGeometrySchema>;
+
+/** Whether a receptor's geometry has an area. */
+export function isPolygonal(geometry: ReceptorGeometry): geometry is Polygonal {
+  return geometry.type === 'Polygon' || geometry.type === 'MultiPolygon';
+}
