@@ -48,7 +48,8 @@ export const sunLedgerSchema = z.object({
   class: z.string(),
   label: z.string(),
   planeM: z.number(),
-  openAreaM2: z.number(),
+  /** Null for a window, which has none: what is m² of others is a share of it. */
+  openAreaM2: z.number().nullable(),
   stepMin: z.number(),
   days: z.array(ledgerDaySchema),
 });

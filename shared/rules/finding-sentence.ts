@@ -1,9 +1,16 @@
 import type { ClauseJudgement } from './judge-receptor.ts';
+import type { JudgedClass } from './judged-class.ts';
 import { leavesOf, type LimitTest } from './limits.ts';
-import type { LimitLeaf, MeasureKind, ReceptorClass, RuleClause } from './rule-schema.ts';
+import type {
+  ClauseBaseline,
+  LimitLeaf,
+  MeasureKind,
+  RuleClause,
+  RuleMeasure,
+} from './rule-schema.ts';
 
 /** What was measured, in words: a parcel is not a garden. */
-export function nameReceptor(receptorClass: ReceptorClass, label: string): string {
+export function nameReceptor(receptorClass: JudgedClass, label: string): string {
   switch (receptorClass) {
     case 'parcel':
       return `the open ground of ${label}`;
@@ -11,8 +18,11 @@ export function nameReceptor(receptorClass: ReceptorClass, label: string): strin
       return `the yard of ${label}`;
     case 'collector':
       return `the collector at ${label}`;
+    case 'window':
+      return `the window at ${label}`;
     case 'open-space':
     case 'walk':
+    case 'ring':
       return label;
   }
 }
@@ -43,9 +53,13 @@ export function sayValue(measure: MeasureKind, value: number): string {
   switch (measure) {
     case 'sun-hours':
     case 'best-run':
+    case 'worst-shade-hours':
       return sayHours(value);
+    case 'sun-share':
     case 'shade-share':
       return `${(value * 100).toFixed(0)} %`;
+    case 'sun-area':
+      return `${value.toFixed(0)} m²`;
     case 'sun-area-hours':
       return `${value.toFixed(0)} m²·h`;
     case 'beam-energy':
@@ -53,13 +67,38 @@ export function sayValue(measure: MeasureKind, value: number): string {
   }
 }
 
-const measureWords: Record<MeasureKind, string> = {
-  'sun-hours': 'sun in the judged hours',
-  'best-run': 'unbroken sun in the judged hours',
-  'shade-share': 'its area in shade at the worst judged instant',
-  'sun-area-hours': 'sunlit area times hours in the judged time',
-  'beam-energy': 'direct clear-sky energy in the judged time',
-};
+/** The measured thing, after its value: `40 % of its area …`. */
+function sayMeasured(measure: RuleMeasure): string {
+  const asked = (hours: number) =>
+    hours === 0 ? 'some sun' : `at least ${sayHours(hours)} of sun`;
+  switch (measure.kind) {
+    case 'sun-share':
+      return `its area with ${asked(measure.hours)} in the judged hours`;
+    case 'sun-area':
+      return `ground with ${asked(measure.hours)} in the judged hours`;
+    case 'sun-hours':
+      return 'sun in the judged hours';
+    case 'best-run':
+      return 'unbroken sun in the judged hours';
+    case 'worst-shade-hours':
+      return 'shade in the judged hours at its most shaded point';
+    case 'shade-share':
+      return 'its area in shade at the worst judged instant';
+    case 'sun-area-hours':
+      return 'sunlit area times hours in the judged time';
+    case 'beam-energy':
+      return 'direct clear-sky energy in the judged time';
+  }
+}
+
+/** What the value before is held to be, and what the value after. */
+function sayStates(baseline: ClauseBaseline | undefined): { before: string; after: string } {
+  if (baseline === undefined) return { before: 'before', after: 'after' };
+  const after = 'with the proposal';
+  if (baseline === 'by-right') return { before: 'with what could be built by right', after };
+  if (baseline === 'proposal-alone') return { before: 'with nothing built', after };
+  return { before: `with a wall of ${baseline.wall} m`, after };
+}
 
 const endings: Record<ClauseJudgement['finding'], string> = {
   met: 'Met.',
@@ -68,24 +107,59 @@ const endings: Record<ClauseJudgement['finding'], string> = {
   'not-affected': 'The proposal changes nothing here in the judged hours.',
 };
 
-/** A finding as a few plain English sentences. */
+/**
+ * A finding as a few plain English sentences.
+ *
+ * @param spacingM of the sample points, where any were taken
+ */
 export function describeFinding(
   clause: RuleClause,
   judgement: ClauseJudgement,
-  receptorClass: ReceptorClass,
+  receptorClass: JudgedClass,
   label: string,
+  spacingM: number | null,
 ): string {
-  const { kind } = clause.measure;
   const when = judgement.day === null ? 'Over the judged days' : `On ${sayDay(judgement.day)}`;
-  const own = judgement.tests.find((test) => test.measure === kind) ?? judgement.tests[0];
+  const leaves = leavesOf(clause.limit);
+  // The clause's own measure leads; where every limit brings one, the first of them.
+  const lead = Math.max(
+    leaves.findIndex((leaf) => leaf.measure === undefined),
+    0,
+  );
+  const measure = leaves[lead]?.measure ?? clause.measure;
+  const test = judgement.tests[lead];
+  const states = sayStates(clause.baseline);
   const values =
-    own === undefined
+    test === undefined
       ? ''
-      : ` has ${sayValue(kind, own.before)} of ${measureWords[kind]} before and ${sayValue(kind, own.after)} after`;
-  const asks = leavesOf(clause.limit)
+      : ` has ${sayValue(measure.kind, test.before)} of ${sayMeasured(measure)} ${states.before} and ${sayValue(measure.kind, test.after)} ${states.after}`;
+  const asks = leaves
     .map((leaf, index) => sayLimit(leaf, judgement.tests[index], clause))
     .join('allOf' in clause.limit ? ', and ' : ', or ');
-  return `${when}, ${nameReceptor(receptorClass, label)}${values}. The rule asks for ${asks}. ${endings[judgement.finding]}`;
+  return [
+    `${when}, ${nameReceptor(receptorClass, label)}${values}.`,
+    `The rule asks for ${asks}.`,
+    endings[judgement.finding],
+    ...saySampling(judgement.tests, spacingM),
+  ].join(' ');
+}
+
+/** How finely sample points lie, and what twice the spacing would change. */
+function saySampling(tests: readonly LimitTest[], spacingM: number | null): string[] {
+  const sampled = tests.find((test) => test.samplingError !== null);
+  if (spacingM === null || sampled === undefined) return [];
+  const error = sayDifference(sampled.measure, sampled.samplingError ?? 0);
+  return [
+    `Taken at points ${spacingM.toFixed(2)} m apart; points twice as far apart change the figure by at most ${error}.`,
+  ];
+}
+
+/** A small difference keeps a digit more than a value. */
+function sayDifference(measure: MeasureKind, difference: number): string {
+  if (measure === 'sun-share') return `${(difference * 100).toFixed(1)} %`;
+  if (measure === 'sun-area') return `${difference.toFixed(1)} m²`;
+  const minutes = Math.round(difference * 60);
+  return minutes === 0 ? 'less than a minute' : sayHours(difference);
 }
 
 function sayLimit(leaf: LimitLeaf, test: LimitTest | undefined, clause: RuleClause): string {

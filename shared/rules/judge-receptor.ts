@@ -1,6 +1,7 @@
 import { runsAbove, type DayLight, type Run } from './day-light.ts';
 import { evaluateLimit, type LimitOutcome, type MeasuredValue } from './limits.ts';
-import { addsUpOverDays, measureDay, measuresShade, stepTolerance } from './measures.ts';
+import { addsUpOverDays, measuresOf, measuresShade, needsSamples } from './measure-kinds.ts';
+import { measureDay, measureTolerance, wholeOf } from './measures.ts';
 import type { DayGroup } from './rule-days.ts';
 import type { Rule, RuleClause, RuleMeasure } from './rule-schema.ts';
 
@@ -16,79 +17,171 @@ export interface ClauseJudgement extends LimitOutcome {
   daysNotMet: number | null;
 }
 
-/** Shade that appears or goes on less than this is rounding, m². */
+/** Judges one receptor by one clause, day by day as the light of each is known. */
+export interface ReceptorJudge {
+  /** Takes a judged day's light; in any order, each day once. */
+  takeDay: (day: DayLight) => void;
+  /** Direct energy in kWh on the whole judged area over the days taken, for the loss index. */
+  energyKwh: () => { before: number; after: number };
+  /** When all days are taken. @throws when a day is missing */
+  judge: () => ClauseJudgement[];
+}
+
+/** Shade that appears or goes on less than this is rounding: m², or the share of a window. */
 const leastChangeM2 = 0.005;
 
+/** What is kept of a day, or of several that add up. */
+interface Account {
+  values: ReadonlyMap<string, MeasuredValue>;
+  isAffected: boolean;
+  /** Whether each day's net new shade stays within what the clause disregards. */
+  isBrief: boolean;
+  /** A window has no m² to disregard. */
+  isWindow: boolean;
+}
+
 /**
- * Judges one receptor by one clause: once for each single day, once for a season by its worst day,
- * and once over all days where the measure adds up.
- *
- * @param lightOf the light on the receptor on a judged day
+ * Makes the judge of one receptor under one clause: it judges once for each single day, once for a
+ * season by its worst day, and once over all days where the measure adds up. It keeps sums and
+ * findings and not the light, so that a year needs no more memory than a day.
  */
-export function judgeReceptor(
+export function createReceptorJudge(
   clause: RuleClause,
   groups: readonly DayGroup[],
   bands: Rule['bands'],
-  lightOf: (date: string) => DayLight,
-): ClauseJudgement[] {
-  if (addsUpOverDays(clause.measure.kind)) {
-    const dates = [...new Set(groups.flatMap((group) => group.dates))];
-    return [judgeDays(clause, bands, dates.map(lightOf), null)];
-  }
-  return groups.map((group) => {
-    const days = group.dates.map((date) => judgeDays(clause, bands, [lightOf(date)], date));
-    const worst = days.reduce((least, day) => (isWorse(day, least) ? day : least));
-    if (!group.isSeason) return worst;
-    return { ...worst, daysNotMet: days.filter((day) => day.finding === 'not-met').length };
-  });
+): ReceptorJudge {
+  const addsUp = addsUpOverDays(clause.measure.kind);
+  const wanted = new Set(groups.flatMap((group) => group.dates));
+  const energy = { before: 0, after: 0 };
+  let sum: Account | null = null;
+  const ofDates = new Map<string, ClauseJudgement>();
+  const datesOf = groups.map((group) => new Set(group.dates));
+  const seasons = groups.map((): Season => ({ ...noDays }));
+  return {
+    takeDay: (day) => {
+      if (!wanted.delete(day.date)) throw new Error(`${day.date} is no day to be judged.`);
+      energy.before += measureDay({ kind: 'beam-energy' }, day, 'before') * day.areaM2;
+      energy.after += measureDay({ kind: 'beam-energy' }, day, 'after') * day.areaM2;
+      const account = accountOf(clause, day);
+      if (addsUp) {
+        sum = sum === null ? account : addAccounts(sum, account);
+        return;
+      }
+      const judgement = judgeAccount(clause, bands, account, day.date);
+      groups.forEach((group, index) => {
+        if (datesOf[index]?.has(day.date) !== true) return;
+        const season = seasons[index];
+        if (!group.isSeason || season === undefined) ofDates.set(day.date, judgement);
+        else takeIntoSeason(season, judgement);
+      });
+    },
+    energyKwh: () => energy,
+    judge: () => {
+      if (wanted.size > 0) throw new Error('A judged day was never computed.');
+      if (sum !== null) return [judgeAccount(clause, bands, sum, null)];
+      return groups.flatMap((group, index) => {
+        if (!group.isSeason) return group.dates.flatMap((date) => ofDates.get(date) ?? []);
+        const { worst, daysNotMet } = seasons[index] ?? noDays;
+        return worst === null ? [] : [{ ...worst, daysNotMet }];
+      });
+    },
+  };
 }
 
-/** Direct energy in kWh on the whole judged area over the days, for the loss index. */
-export function beamEnergyKwh(days: readonly DayLight[], state: 'before' | 'after'): number {
-  return days.reduce(
-    (sum, day) => sum + measureDay({ kind: 'beam-energy' }, day, state) * day.areaM2,
-    0,
-  );
+interface Season {
+  worst: ClauseJudgement | null;
+  daysNotMet: number;
 }
 
-function judgeDays(
+const noDays: Season = { worst: null, daysNotMet: 0 };
+
+function takeIntoSeason(season: Season, judgement: ClauseJudgement): void {
+  if (season.worst === null || isWorse(judgement, season.worst)) season.worst = judgement;
+  if (judgement.finding === 'not-met') season.daysNotMet += 1;
+}
+
+function accountOf(clause: RuleClause, day: DayLight): Account {
+  const lights = day.spans.flatMap((span) => span.lights);
+  return {
+    values: new Map(
+      measuresOf(clause).map((measure) => [
+        keyOf(measure),
+        measureValue(measure, day, clause.step),
+      ]),
+    ),
+    isAffected: lights.some(
+      ({ netNewM2, removedM2 }) => netNewM2 > leastChangeM2 || removedM2 > leastChangeM2,
+    ),
+    isBrief: netNewMinutes(disregardedM2(clause, day), day) <= clause.disregard.minutes,
+    isWindow: day.isWindow,
+  };
+}
+
+/** Only measures that add up come here, and none of them is sampled. */
+function addAccounts(a: Account, b: Account): Account {
+  return {
+    values: new Map(
+      [...a.values].map(([key, value]) => {
+        const more = b.values.get(key) ?? value;
+        return [
+          key,
+          {
+            before: value.before + more.before,
+            after: value.after + more.after,
+            theoretical: value.theoretical + more.theoretical,
+            tolerance: value.tolerance + more.tolerance,
+            whole: value.whole + more.whole,
+            coarser: [],
+            largestNetNewM2: Math.max(value.largestNetNewM2, more.largestNetNewM2),
+          },
+        ];
+      }),
+    ),
+    isAffected: a.isAffected || b.isAffected,
+    isBrief: a.isBrief && b.isBrief,
+    isWindow: a.isWindow,
+  };
+}
+
+function judgeAccount(
   clause: RuleClause,
   bands: Rule['bands'],
-  days: readonly DayLight[],
+  account: Account,
   day: string | null,
 ): ClauseJudgement {
-  const valueOf = memoize((measure: RuleMeasure) => measureDays(measure, days, clause.step));
-  const outcome = evaluateLimit(clause.limit, clause.measure, clause.disregard.area, valueOf);
+  const valueOf = (measure: RuleMeasure): MeasuredValue => {
+    const value = account.values.get(keyOf(measure));
+    if (value === undefined) throw new Error(`${measure.kind} was not measured.`);
+    return value;
+  };
+  const allowedM2 = account.isWindow ? 0 : clause.disregard.area;
+  const outcome = evaluateLimit(clause.limit, clause.measure, allowedM2, valueOf);
   const loss = lossOf(clause.measure, valueOf(clause.measure));
   return {
     ...outcome,
     day,
-    finding: findingOf(clause, days, outcome.met),
+    finding: findingOf(account, outcome.met),
     loss,
     band: bandOf(loss, bands),
     daysNotMet: null,
   };
 }
 
-function findingOf(
-  clause: RuleClause,
-  days: readonly DayLight[],
-  isMet: boolean,
-): ClauseJudgement['finding'] {
-  const lights = days.flatMap((day) => day.spans.flatMap((span) => span.lights));
-  const isAffected = lights.some(
-    ({ netNewM2, removedM2 }) => netNewM2 > leastChangeM2 || removedM2 > leastChangeM2,
-  );
-  if (!isAffected) return 'not-affected';
+function findingOf(account: Account, isMet: boolean): ClauseJudgement['finding'] {
+  if (!account.isAffected) return 'not-affected';
   if (isMet) return 'met';
-  const isDisregarded = days.every((day) => netNewMinutes(clause, day) <= clause.disregard.minutes);
-  return isDisregarded ? 'disregarded' : 'not-met';
+  return account.isBrief ? 'disregarded' : 'not-met';
+}
+
+/** m² that a new shadow may cover unheeded; a window has none, so any new shade on it counts. */
+function disregardedM2(clause: RuleClause, { isWindow }: DayLight): number {
+  return isWindow ? leastChangeM2 : clause.disregard.area;
 }
 
 /** Minutes of a day's window in which more than the disregarded area is shaded anew. */
-function netNewMinutes(clause: RuleClause, day: DayLight): number {
+function netNewMinutes(areaM2: number, day: DayLight): number {
   const runs = day.spans.flatMap((span): Run[] =>
-    runsAbove(span, clause.disregard.area, (index) => span.lights[index]?.netNewM2 ?? 0, true),
+    runsAbove(span, areaM2, (index) => span.lights[index]?.netNewM2 ?? 0, true),
   );
   const isInstantOver = runs.some((run) => run.startMs === run.endMs);
   const minutes = runs.reduce((sum, run) => sum + (run.endMs - run.startMs) / 60_000, 0);
@@ -96,29 +189,27 @@ function netNewMinutes(clause: RuleClause, day: DayLight): number {
   return isInstantOver && minutes === 0 ? Infinity : minutes;
 }
 
-function measureDays(
-  measure: RuleMeasure,
-  days: readonly DayLight[],
-  stepMin: number,
-): MeasuredValue {
-  const sum = (valueOf: (day: DayLight) => number) =>
-    days.reduce((total, day) => total + valueOf(day), 0);
-  const netNew = days.flatMap((day) =>
-    day.spans.flatMap((span) => span.lights.map((light) => light.netNewM2)),
-  );
+function measureValue(measure: RuleMeasure, day: DayLight, stepMin: number): MeasuredValue {
+  const valuesBy = (grid?: number) => ({
+    before: measureDay(measure, day, 'before', grid),
+    after: measureDay(measure, day, 'after', grid),
+    theoretical: measureDay(measure, day, 'theoretical', grid),
+  });
+  const netNew = day.spans.flatMap((span) => span.lights.map((light) => light.netNewM2));
+  const gridCount = needsSamples(measure.kind) ? (day.samples?.points.gridCount ?? 0) : 0;
   return {
-    before: sum((day) => measureDay(measure, day, 'before')),
-    after: sum((day) => measureDay(measure, day, 'after')),
-    theoretical: sum((day) => measureDay(measure, day, 'theoretical')),
-    tolerance: sum((day) => stepTolerance(measure, day, stepMin)),
+    ...valuesBy(),
+    tolerance: measureTolerance(measure, day, stepMin),
+    whole: wholeOf(measure, day),
+    coarser: Array.from({ length: gridCount }, (_, grid) => valuesBy(grid)),
     largestNetNewM2: Math.max(0, ...netNew),
   };
 }
 
 function lossOf(measure: RuleMeasure, value: MeasuredValue): number | null {
   const isShade = measuresShade(measure.kind);
-  const before = isShade ? 1 - value.before : value.before;
-  const after = isShade ? 1 - value.after : value.after;
+  const before = isShade ? value.whole - value.before : value.before;
+  const after = isShade ? value.whole - value.after : value.after;
   return before > 0 ? (before - after) / before : null;
 }
 
@@ -129,22 +220,18 @@ function bandOf(loss: number | null, bands: Rule['bands']): string | null {
 
 const severity = { 'not-affected': 0, met: 1, disregarded: 2, 'not-met': 3 } as const;
 
+/** Days come in any order; of equal ones the earliest stands for the season. */
 function isWorse(day: ClauseJudgement, than: ClauseJudgement): boolean {
   const difference = severity[day.finding] - severity[than.finding];
   if (difference !== 0) return difference > 0;
-  return decisiveMargin(day) < decisiveMargin(than);
+  const margins = decisiveMargin(day) - decisiveMargin(than);
+  return margins === 0 ? (day.day ?? '') < (than.day ?? '') : margins < 0;
 }
 
 function decisiveMargin(judgement: ClauseJudgement): number {
   return Math.max(...judgement.tests.map((test) => test.margin));
 }
 
-function memoize(compute: (measure: RuleMeasure) => MeasuredValue) {
-  const known = new Map<string, MeasuredValue>();
-  return (measure: RuleMeasure): MeasuredValue => {
-    const key = JSON.stringify(measure);
-    const value = known.get(key) ?? compute(measure);
-    known.set(key, value);
-    return value;
-  };
+function keyOf(measure: RuleMeasure): string {
+  return JSON.stringify(measure);
 }

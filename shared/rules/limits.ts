@@ -1,13 +1,21 @@
-import { measuresShade } from './measures.ts';
-import { measureUnits, type LimitLeaf, type RuleLimit, type RuleMeasure } from './rule-schema.ts';
+import { measureUnits, measuresShade } from './measure-kinds.ts';
+import type { LimitLeaf, RuleLimit, RuleMeasure } from './rule-schema.ts';
 
-/** A measure's value in each state, and what else its limits need. */
-export interface MeasuredValue {
+/** A measure's value in each state. */
+export interface StateValues {
   before: number;
   after: number;
   theoretical: number;
-  /** How much the value can change within one step. */
+}
+
+/** A measure's value in each state, and what else its limits need. */
+export interface MeasuredValue extends StateValues {
+  /** How much the value can change within one step, or one grid spacing. */
   tolerance: number;
+  /** What a measure of shade is the rest of: the whole area, or the whole judged time. */
+  whole: number;
+  /** The values by each of the sampling grids of twice the spacing; none where nothing is sampled. */
+  coarser: readonly StateValues[];
   /** The largest area in m² that is shaded after and not before at any judged instant. */
   largestNetNewM2: number;
 }
@@ -23,6 +31,10 @@ export interface LimitTest {
   /** How far on the right side of the limit; negative when not met. */
   margin: number;
   met: boolean;
+  /** By how many sampling grids of twice the spacing the limit was tried as well. */
+  coarserGrids: number;
+  /** How much the worst of them differs, in the measure's unit; null where nothing is sampled. */
+  samplingError: number | null;
 }
 
 export interface LimitOutcome {
@@ -37,7 +49,8 @@ const rounding = 1e-9;
 
 /**
  * Holds a clause's limits against its measured values. An outcome is `close` when the limit that
- * decides it is met or missed by no more than one step can change.
+ * decides it is met or missed by no more than one step or one grid spacing can change, or when one
+ * of the sampling grids of twice the spacing decides otherwise.
  */
 export function evaluateLimit(
   limit: RuleLimit,
@@ -46,24 +59,51 @@ export function evaluateLimit(
   valueOf: (measure: RuleMeasure) => MeasuredValue,
 ): LimitOutcome {
   const tests: LimitTest[] = [];
-  const evaluate = (part: RuleLimit): { met: boolean; steps: number } => {
-    if ('anyOf' in part) return decide(part.anyOf.map(evaluate), 'any');
-    if ('allOf' in part) return decide(part.allOf.map(evaluate), 'all');
-    const measure = part.measure ?? clauseMeasure;
-    const value = valueOf(measure);
-    const test = testLeaf(part, measure, value, disregardAreaM2);
-    tests.push(test);
-    // Shade that is judged place by place has its margin in m² and its own allowance.
-    const isPlaceByPlace = 'noWorse' in part && measuresShade(measure.kind);
-    const tolerance = isPlaceByPlace ? 0 : value.tolerance;
-    return { met: test.met, steps: stepsFromLimit(test.margin, tolerance) };
-  };
-  const { met, steps } = evaluate(limit);
-  return { met, close: Math.abs(steps) <= 1, tests };
+  const decision = decide(limit, clauseMeasure, disregardAreaM2, valueOf, tests);
+  const gridCount = tests.reduce((most, { coarserGrids }) => Math.max(most, coarserGrids), 0);
+  const hangsOnGrid = Array.from({ length: gridCount }, (_, grid) => {
+    const byGrid = (measure: RuleMeasure): MeasuredValue => {
+      const value = valueOf(measure);
+      return { ...value, ...value.coarser[grid] };
+    };
+    return decide(limit, clauseMeasure, disregardAreaM2, byGrid, []).met;
+  }).some((met) => met !== decision.met);
+  return { met: decision.met, close: Math.abs(decision.steps) <= 1 || hangsOnGrid, tests };
+}
+
+interface Decision {
+  met: boolean;
+  /** How many steps or spacings from the limit. */
+  steps: number;
+}
+
+function decide(
+  limit: RuleLimit,
+  clauseMeasure: RuleMeasure,
+  disregardAreaM2: number,
+  valueOf: (measure: RuleMeasure) => MeasuredValue,
+  tests: LimitTest[],
+): Decision {
+  const decidePart = (part: RuleLimit) =>
+    decide(part, clauseMeasure, disregardAreaM2, valueOf, tests);
+  if ('anyOf' in limit) return join(limit.anyOf.map(decidePart), 'any');
+  if ('allOf' in limit) return join(limit.allOf.map(decidePart), 'all');
+  const measure = limit.measure ?? clauseMeasure;
+  const value = valueOf(measure);
+  const test = testLeaf(limit, measure, value, disregardAreaM2);
+  tests.push(test);
+  // Shade that is judged place by place has its margin in m² and its own allowance.
+  const tolerance = isPlaceByPlace(limit, measure) ? 0 : value.tolerance;
+  return { met: test.met, steps: stepsFromLimit(test.margin, tolerance) };
+}
+
+/** Whether shade is judged place by place: what is gained elsewhere does not make up for it. */
+function isPlaceByPlace(leaf: LimitLeaf, measure: RuleMeasure): boolean {
+  return 'noWorse' in leaf && measure.kind === 'shade-share';
 }
 
 /** The members of a limit decide by the one that is furthest on the right side, or the least far. */
-function decide(parts: { met: boolean; steps: number }[], by: 'any' | 'all') {
+function join(parts: readonly Decision[], by: 'any' | 'all'): Decision {
   const steps = parts.map((part) => part.steps);
   return by === 'any'
     ? { met: parts.some((part) => part.met), steps: Math.max(...steps) }
@@ -90,7 +130,17 @@ function testLeaf(
     limit,
     margin,
     met: margin >= -rounding,
+    coarserGrids: value.coarser.length,
+    samplingError: largestDifference(value),
   };
+}
+
+/** How far a grid of twice the spacing is from the value before or after; null where nothing is sampled. */
+function largestDifference({ before, after, coarser }: MeasuredValue): number | null {
+  if (coarser.length === 0) return null;
+  return Math.max(
+    ...coarser.flatMap((one) => [Math.abs(one.before - before), Math.abs(one.after - after)]),
+  );
 }
 
 function boundOf(
@@ -109,18 +159,19 @@ function boundOf(
       const limit = leaf.keeps * value.before;
       return { limit, margin: value.after - limit };
     }
-    const limit = 1 - leaf.keeps * (1 - value.before);
+    const limit = value.whole - leaf.keeps * (value.whole - value.before);
     return { limit, margin: limit - value.after };
   }
   if ('losesAtMost' in leaf) return { limit: leaf.losesAtMost, margin: leaf.losesAtMost - lost };
   if ('losesAtMostShare' in leaf) {
-    const whole = leaf.of === 'theoretical' ? value.theoretical : value.before;
-    const limit = leaf.losesAtMostShare * (isShade ? 1 - whole : whole);
+    const base = leaf.of === 'theoretical' ? value.theoretical : value.before;
+    const limit = leaf.losesAtMostShare * (isShade ? value.whole - base : base);
     return { limit, margin: limit - lost };
   }
-  // Shade is judged place by place: what is gained elsewhere does not make up for it.
-  if (isShade) return { limit: value.before, margin: disregardAreaM2 - value.largestNetNewM2 };
-  return { limit: value.before, margin: value.after - value.before };
+  if (isPlaceByPlace(leaf, measure)) {
+    return { limit: value.before, margin: disregardAreaM2 - value.largestNetNewM2 };
+  }
+  return { limit: value.before, margin: -lost };
 }
 
 /** The single limits of a clause, in the order in which their tests stand in an outcome. */

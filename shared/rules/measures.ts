@@ -4,33 +4,30 @@ import {
   sunlitAreaM2,
   type DayLight,
   type LightState,
+  type SpanLight,
 } from './day-light.ts';
-import type { MeasureKind, RuleMeasure } from './rule-schema.ts';
+import type { RuleMeasure } from './rule-schema.ts';
+import { measureSamples, samplesTolerance } from './sample-measures.ts';
 
 const hourMs = 3_600_000;
 
-/** Whether a measure adds up over a clause's days, so that its limits hold on their sum. */
-export function addsUpOverDays(kind: MeasureKind): boolean {
-  return kind === 'sun-area-hours' || kind === 'beam-energy';
-}
-
-/** Whether more of a measure means less sun. */
-export function measuresShade(kind: MeasureKind): boolean {
-  return kind === 'shade-share';
-}
-
 /**
  * A measure's value on one receptor on one day, in the unit of `measureUnits`. Between two judged
- * instants the sunlit area runs along a straight line.
+ * instants the sunlit area runs along a straight line; a sample point counts half a step on each
+ * side of an instant. A day without judged time has no sun and no shade.
+ *
+ * @param grid for measures of sample points: one of the grids of twice the spacing, in place of all points
  */
-export function measureDay(measure: RuleMeasure, day: DayLight, state: LightState): number {
+export function measureDay(
+  measure: RuleMeasure,
+  day: DayLight,
+  state: LightState,
+  grid?: number,
+): number {
   const { areaM2, spans } = day;
-  const total = (spanValue: (span: (typeof spans)[number]) => number) =>
+  const total = (spanValue: (span: SpanLight) => number) =>
     spans.reduce((sum, span) => sum + spanValue(span), 0);
-  const areaAt = (span: (typeof spans)[number]) => (index: number) => {
-    const light = span.lights[index];
-    return light === undefined ? 0 : sunlitAreaM2(light, state, areaM2);
-  };
+  const areaAt = (span: SpanLight) => (index: number) => sunlitAreaM2(span, index, state, areaM2);
   switch (measure.kind) {
     case 'sun-hours':
       return total((span) => integrateHours(span, areaAt(span))) / areaM2;
@@ -58,14 +55,18 @@ export function measureDay(measure: RuleMeasure, day: DayLight, state: LightStat
       );
       return Math.max(0, ...shades);
     }
+    case 'sun-share':
+    case 'sun-area':
+    case 'worst-shade-hours':
+      return measureSamples(measure, day, state, grid);
   }
 }
 
 /**
- * How much a measure's value can change within one step of the clause: what `close` is about. A
- * single judged instant has no step, so the tolerance is 0.
+ * How much a measure's value can change within one step of the clause, or within one grid spacing
+ * if that is more: what `close` is about. A single judged instant has no step, so the tolerance is 0.
  */
-export function stepTolerance(measure: RuleMeasure, day: DayLight, stepMin: number): number {
+export function measureTolerance(measure: RuleMeasure, day: DayLight, stepMin: number): number {
   const stepHours = stepMin / 60;
   const isInstant = day.spans.every((span) => span.atMs.length < 2);
   if (isInstant) return 0;
@@ -87,5 +88,14 @@ export function stepTolerance(measure: RuleMeasure, day: DayLight, stepMin: numb
       );
       return Math.max(0, ...changes) / day.areaM2;
     }
+    case 'sun-share':
+    case 'sun-area':
+    case 'worst-shade-hours':
+      return samplesTolerance(measure, day, stepHours);
   }
+}
+
+/** What a measure of shade is the rest of: the whole area, or the whole judged time. */
+export function wholeOf(measure: RuleMeasure, day: DayLight): number {
+  return measure.kind === 'worst-shade-hours' ? (day.samples?.judgedHours ?? 0) : 1;
 }

@@ -1,7 +1,15 @@
 import { z } from 'zod';
+import { checkClause } from './check-clause.ts';
 
 /** What may be judged; see `classes` of the evidence file's receptors. */
-export const receptorClasses = ['parcel', 'yard', 'open-space', 'collector', 'walk'] as const;
+export const receptorClasses = [
+  'parcel',
+  'yard',
+  'open-space',
+  'collector',
+  'walk',
+  'window',
+] as const;
 export const receptorClassSchema = z.enum(receptorClasses);
 export type ReceptorClass = z.infer<typeof receptorClassSchema>;
 
@@ -58,25 +66,30 @@ const windowSchema = z.discriminatedUnion('basis', [
 ]);
 export type RuleWindow = z.infer<typeof windowSchema>;
 
-/** The measures that are taken over a receptor's area; each has a value before and after. */
+/** Hours of direct sun, summed over the window; 0 asks for more than none. */
+const hoursSchema = z.number().min(0).max(24);
+
+/** What is measured; each has a value before and after. */
 const measureSchema = z.discriminatedUnion('kind', [
+  /** The share of the area with at least so many hours of sun. */
+  z.strictObject({ kind: z.literal('sun-share'), hours: hoursSchema }),
+  /** The same in m². */
+  z.strictObject({ kind: z.literal('sun-area'), hours: hoursSchema }),
+  /** Mean hours of sun over the area. */
   z.strictObject({ kind: z.literal('sun-hours') }),
+  /** The longest unbroken time with at least that share of the area in sun. */
   z.strictObject({ kind: z.literal('best-run'), share: z.number().gt(0).max(1) }),
+  /** Hours of shade at the most shaded point. */
+  z.strictObject({ kind: z.literal('worst-shade-hours') }),
+  /** The largest share of the area in shade at any judged instant. */
   z.strictObject({ kind: z.literal('shade-share') }),
+  /** Sunlit area × time, added over the days. */
   z.strictObject({ kind: z.literal('sun-area-hours') }),
+  /** Direct clear-sky energy on the receptor's plane, added over the days. */
   z.strictObject({ kind: z.literal('beam-energy') }),
 ]);
 export type RuleMeasure = z.infer<typeof measureSchema>;
 export type MeasureKind = RuleMeasure['kind'];
-
-/** The unit of each measure's value; 1 is a share from 0 to 1. */
-export const measureUnits = {
-  'sun-hours': 'h',
-  'best-run': 'h',
-  'shade-share': '1',
-  'sun-area-hours': 'm²·h',
-  'beam-energy': 'kWh/m²',
-} as const satisfies Record<MeasureKind, string>;
 
 const limitLeafSchema = z.union([
   z.strictObject({ atLeast: z.number().min(0), measure: measureSchema.optional() }),
@@ -102,12 +115,36 @@ const limitSchema: z.ZodType<RuleLimit> = z.lazy(() =>
   ]),
 );
 
+/** The band between two distances in metres outside the site's boundary; without `to` as far as the shadow reaches. */
+const ringSchema = z.strictObject({
+  from: z.number().min(0).max(2000),
+  to: z.number().gt(0).max(2000).optional(),
+});
+export type ReceptorRing = z.infer<typeof ringSchema>;
+
+/** What stands before, in place of the context and what exists on the site. */
+const baselineSchema = z.union([
+  z.strictObject({
+    /** Metres above the datum of a hypothetical wall along the site's boundary. */
+    wall: z.number().gt(0).max(200),
+    /** What stands beside the wall. */
+    with: z.array(z.enum(['context', 'existing'])).default(['context']),
+  }),
+  /** What could be built without this approval, with the context. */
+  z.literal('by-right'),
+  /** Before is nothing at all, after the proposal and nothing else. */
+  z.literal('proposal-alone'),
+]);
+export type ClauseBaseline = z.infer<typeof baselineSchema>;
+
 export const clauseSchema = z
   .strictObject({
     id: z.string().regex(/^[a-z0-9]+(?:-[a-z0-9]+)*$/, 'Use small letters, digits and hyphens.'),
     title: z.string().trim().min(1).max(200),
+    /** Either classes or a ring. */
     receptors: z.strictObject({
-      classes: z.array(receptorClassSchema).min(1),
+      classes: z.array(receptorClassSchema).default([]),
+      ring: ringSchema.optional(),
       /** Height in metres at which the shadow is taken, in place of the receptors' own. */
       plane: z.number().optional(),
       /** Of which area: `open` leaves out what context buildings stand on. */
@@ -121,6 +158,7 @@ export const clauseSchema = z
     step: z.int().min(1).max(120).default(10),
     measure: measureSchema,
     limit: limitSchema,
+    baseline: baselineSchema.optional(),
     /** A receptor shaded anew on more than `area` m² for at most `minutes` a day is not held against the proposal. */
     disregard: z
       .strictObject({ minutes: z.number().min(0).default(0), area: z.number().min(0).default(1) })
@@ -128,29 +166,8 @@ export const clauseSchema = z
     weight: z.number().gt(0).max(100).default(1),
   })
   .superRefine((clause, context) => {
-    const { window } = clause;
-    if (window.basis === 'sun') return;
-    if (window.from > window.to) {
-      context.addIssue({
-        code: 'custom',
-        path: ['window', 'to'],
-        message: 'The window ends before it begins.',
-      });
-    }
-    if (window.from === window.to && clause.measure.kind !== 'shade-share') {
-      context.addIssue({
-        code: 'custom',
-        path: ['window', 'to'],
-        message: 'A single instant can be judged by shade-share only.',
-      });
-    }
-    const toMinutes = (clock: string) => Number(clock.slice(0, 2)) * 60 + Number(clock.slice(3));
-    if (window.from < window.to && clause.step > toMinutes(window.to) - toMinutes(window.from)) {
-      context.addIssue({
-        code: 'custom',
-        path: ['step'],
-        message: 'The step is longer than the window.',
-      });
+    for (const { path, message } of checkClause(clause)) {
+      context.addIssue({ code: 'custom', path, message });
     }
   });
 export type RuleClause = z.infer<typeof clauseSchema>;

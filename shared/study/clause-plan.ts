@@ -1,22 +1,29 @@
-import type { DayLight, SpanLight } from '../rules/day-light.ts';
+import { needsSamples, measuresOf } from '../rules/measure-kinds.ts';
 import { expandDays, type DayGroup } from '../rules/rule-days.ts';
 import type { RuleClause } from '../rules/rule-schema.ts';
 import { instantsOfSpan, windowSpans } from '../rules/rule-window.ts';
-import type { AreaLight } from '../shadow/receptor-light.ts';
-import { clearSkyBeamWm2, incidenceCosine, type ClearSky } from '../solar/clear-sky-beam.ts';
-import { sunPositionAt } from '../solar/sun-position.ts';
+import type { Clipper } from '../shadow/clipper.ts';
+import { makeLitArea } from '../shadow/receptor-light.ts';
+import { sampleArea } from '../shadow/sample-grid.ts';
+import type { SamplePoints } from '../shadow/sample-points.ts';
+import { createBaselineBlocks, type ClauseBlocks } from './baseline-blocks.ts';
 import type { StudyInput } from './evidence-schema.ts';
-import type { Scene, SceneReceptor } from './scene.ts';
+import { makeRingReceptor } from './ring-receptor.ts';
+import { footprintsThrough, openAreaOn, type SceneReceptor } from './scene-receptor.ts';
+import type { Scene } from './scene.ts';
 
 /** A receptor as a clause judges it: on the clause's plane, of its open or whole area. */
 export interface JudgedReceptor {
   receptor: SceneReceptor;
   planeM: number;
+  /** m²; 1 for a window. */
   areaM2: number;
+  /** Where its light is taken point by point; null where no measure asks for it. */
+  samples: SamplePoints | null;
 }
 
-/** What one clause needs: its days, the judged instants of each, and its receptors. */
-export interface ClausePlan {
+/** What one clause needs: its days, the judged instants of each, its receptors, and what stands. */
+export interface ClausePlan extends ClauseBlocks {
   clause: RuleClause;
   groups: DayGroup[];
   /** For each date, the instants of each stretch of its window. */
@@ -26,71 +33,90 @@ export interface ClausePlan {
 
 /** Below this a receptor is built over and has nothing to judge, m². */
 const leastAreaM2 = 0.01;
+/** No receptor is sampled at more points; a ring, which stands alone in its clause, at ten times as many. */
+const mostPoints = 10_000;
 
-/** Works out what each clause of a rule judges in a scene. */
-export function planClauses(input: StudyInput, scene: Scene): ClausePlan[] {
+/** Works out what each clause of a rule judges in a scene, and makes its rings. */
+export function planClauses(input: StudyInput, scene: Scene, clipper: Clipper): ClausePlan[] {
+  const blocksBy = createBaselineBlocks(input, scene);
   return input.rule.clauses.map((clause) => {
     const groups = expandDays(clause.days, input.year, input.place);
     const dates = [...new Set(groups.flatMap((group) => group.dates))].sort();
+    const spansOfDate = new Map(
+      dates.map((date) => [
+        date,
+        windowSpans(clause, date, input.place).map((span) => instantsOfSpan(span, clause.step)),
+      ]),
+    );
+    const standing = blocksBy(clause.baseline);
+    const { ring, classes } = clause.receptors;
+    const instants = [...spansOfDate.values()].flat(2);
+    const ringReceptor =
+      ring === undefined
+        ? null
+        : makeRingReceptor(clause, ring, scene, standing.blocks, input, instants, clipper);
+    const receptors =
+      ringReceptor === null
+        ? scene.receptors.filter((receptor) => isOfClass(receptor, classes))
+        : [ringReceptor];
     return {
+      ...standing,
       clause,
       groups,
-      spansOfDate: new Map(
-        dates.map((date) => [
-          date,
-          windowSpans(clause, date, input.place).map((span) => instantsOfSpan(span, clause.step)),
-        ]),
+      spansOfDate,
+      receptors: receptors.flatMap((receptor) =>
+        judgeOn(receptor, clause, scene, standing, input.settings.gridM),
       ),
-      receptors: scene.receptors.flatMap((receptor) => {
-        if (receptor.isOnSite || !clause.receptors.classes.includes(receptor.class)) return [];
-        const areaM2 = clause.receptors.of === 'whole' ? receptor.wholeAreaM2 : receptor.openAreaM2;
-        if (areaM2 < leastAreaM2) return [];
-        return [{ receptor, planeM: clause.receptors.plane ?? receptor.planeM, areaM2 }];
-      }),
     };
   });
 }
 
-/** Puts the light on a receptor at the judged instants together with the energy that it carries. */
-export function makeDayLight(
-  date: string,
-  judged: JudgedReceptor,
-  spans: readonly number[][],
-  lightAt: (atMs: number) => AreaLight,
-  input: StudyInput,
-): DayLight {
-  const sky = skyOf(date, input);
-  return {
-    date,
-    areaM2: judged.areaM2,
-    spans: spans.map((atMs): SpanLight => ({
-      atMs,
-      lights: atMs.map(lightAt),
-      beamWm2: atMs.map((instant) => beamOnReceptorWm2(instant, judged.receptor, sky, input)),
-    })),
-  };
+function isOfClass({ class: own }: SceneReceptor, classes: readonly string[]): boolean {
+  return classes.includes(own);
 }
 
-/** The clear sky of a date: what the beam depends on besides the sun. */
-export function skyOf(date: string, input: StudyInput): ClearSky {
-  const startOfYear = Date.parse(`${date.slice(0, 4)}-01-01`);
-  return {
-    dayOfYear: Math.round((Date.parse(date) - startOfYear) / 86_400_000) + 1,
-    elevationM: input.place.elevation,
-    linkeTurbidity: input.settings.beam.linkeTurbidity,
-  };
-}
-
-/** Direct clear-sky irradiance on a receptor's own slope, W/m². */
-export function beamOnReceptorWm2(
-  atMs: number,
-  receptor: Pick<SceneReceptor, 'tiltDeg' | 'facingDeg'>,
-  sky: ClearSky,
-  input: StudyInput,
-): number {
-  const sun = sunPositionAt(atMs, input.place.longitude, input.place.latitude);
-  return (
-    clearSkyBeamWm2(sun.altitudeDeg, sky) *
-    incidenceCosine(sun, receptor.tiltDeg, receptor.facingDeg)
-  );
+function judgeOn(
+  receptor: SceneReceptor,
+  clause: RuleClause,
+  scene: Scene,
+  { hasContext }: ClauseBlocks,
+  gridM: number,
+): JudgedReceptor[] {
+  if (receptor.isOnSite) return [];
+  const planeM = clause.receptors.plane ?? receptor.planeM;
+  const isSampled = measuresOf(clause).some(({ kind }) => needsSamples(kind));
+  if (receptor.front !== null) {
+    return [{ receptor, planeM, areaM2: 1, samples: isSampled ? receptor.front.points : null }];
+  }
+  const isOpen = clause.receptors.of === 'open';
+  const areaM2 = !isOpen
+    ? receptor.wholeAreaM2
+    : planeM === receptor.planeM
+      ? receptor.openAreaM2
+      : openAreaOn(receptor.area, planeM, scene);
+  if (areaM2 < leastAreaM2) return [];
+  const { rings, siteRings, box } = receptor.area;
+  const footprints = isOpen ? footprintsThrough(scene.blocks, planeM, box) : [];
+  const outside = [...siteRings, ...footprints];
+  return [
+    {
+      // Context that casts no shadow would leave what it stands on in sun.
+      receptor:
+        hasContext || footprints.length === 0
+          ? receptor
+          : { ...receptor, area: makeLitArea(rings, outside) },
+      planeM,
+      areaM2,
+      samples: isSampled
+        ? sampleArea({
+            rings,
+            outside,
+            areaM2,
+            gridM,
+            mostPoints: receptor.class === 'ring' ? mostPoints * 10 : mostPoints,
+            withBorder: measuresOf(clause).some(({ kind }) => kind === 'worst-shade-hours'),
+          })
+        : null,
+    },
+  ];
 }

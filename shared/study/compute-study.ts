@@ -1,5 +1,6 @@
 import { joinBoxes } from '../geometry/ring.ts';
 import type { Clipper } from '../shadow/clipper.ts';
+import type { IndexedBlocks } from '../shadow/shadow-layer.ts';
 import { planClauses, type ClausePlan } from './clause-plan.ts';
 import { crossCheckReceptors, type CrossCheck } from './cross-check.ts';
 import { digestOf } from './digest.ts';
@@ -11,7 +12,7 @@ import { lightAtInstant, type InstantLight, type Reach } from './instant-light.t
 import { createStudyJudge } from './judge-study.ts';
 import { defaultInstants } from './key-date-instants.ts';
 import { roundArea, roundMeasure } from './rounding.ts';
-import { buildScene, type Scene } from './scene.ts';
+import { buildScene, type Scene, type SceneReceptor } from './scene.ts';
 
 export interface ComputeStudyOptions {
   clipper: Clipper;
@@ -38,27 +39,32 @@ export async function computeStudy(
   input: StudyInput,
   options: ComputeStudyOptions,
 ): Promise<ComputedStudy> {
-  const scene = buildScene(input);
-  const plans = planClauses(input, scene);
-  const judge = createStudyJudge(plans, input);
-  const { cumulativeBlocks } = scene;
-  const cumulativeJudge = cumulativeBlocks === null ? null : createStudyJudge(plans, input);
+  const builtScene = buildScene(input);
+  const plans = planClauses(input, builtScene, options.clipper);
+  // Rings are shown like any other receptor.
+  const scene = { ...builtScene, receptors: [...builtScene.receptors, ...ringsOf(plans)] };
+  const judge = createStudyJudge(plans, input, scene.sampler, (plan) => plan.blocks);
+  const cumulativeJudge =
+    scene.cumulativeBlocks === null
+      ? null
+      : createStudyJudge(
+          plans,
+          input,
+          scene.sampler,
+          (plan) => plan.cumulativeBlocks ?? plan.blocks,
+        );
   const listed = listedInstants(input);
   const reach = reachOfReceptors(scene, plans);
-  const light = await computeLight(
-    input,
-    scene,
-    reach,
-    listed,
-    plans,
-    options,
-    (instant, dates) => {
-      for (const date of dates) judge.take(date, instant);
-      if (cumulativeJudge === null || cumulativeBlocks === null || dates.length === 0) return;
-      const cumulative = lightAtInstant(scene, cumulativeBlocks, input, instant.atMs, reach);
-      for (const date of dates) cumulativeJudge.take(date, cumulative);
-    },
-  );
+  const light = await computeLight(input, scene, reach, listed, plans, options, (instant) => {
+    const lights = new Map([[scene.blocks, instant]]);
+    const lightOf = (blocks: IndexedBlocks) => {
+      const known = lights.get(blocks) ?? lightAtInstant(scene, blocks, input, instant.atMs, reach);
+      lights.set(blocks, known);
+      return known;
+    };
+    judge.take(instant.atMs, lightOf);
+    cumulativeJudge?.take(instant.atMs, lightOf);
+  });
   const { results, findings } = judge.judge();
   const evidence = {
     ...input,
@@ -104,7 +110,7 @@ async function computeLight(
   listed: readonly string[],
   plans: readonly ClausePlan[],
   { clipper, onProgress }: ComputeStudyOptions,
-  takeJudged: (instant: InstantLight, dates: readonly string[]) => void,
+  takeJudged: (instant: InstantLight) => void,
 ): Promise<ListedLight> {
   const byInstant = instantsByMs(listed, plans);
   const check: CrossCheck = { largestDifferenceM2: 0, at: null, receptor: null };
@@ -112,12 +118,12 @@ async function computeLight(
   const instants: StudyInstant[] = [];
   const receptorRows = scene.receptors.map((): ReceptorResult['instants'] => []);
   let done = 0;
-  for (const [atMs, wanted] of byInstant) {
+  for (const [atMs, texts] of byInstant) {
     // What is drawn takes the whole scene; what is only judged takes what can shade a receptor.
-    const within = wanted.listed.length > 0 ? undefined : reach;
+    const within = texts.length > 0 ? undefined : reach;
     const instant = lightAtInstant(scene, scene.blocks, input, atMs, within);
-    takeJudged(instant, wanted.judgedDates);
-    for (const at of wanted.listed) {
+    takeJudged(instant);
+    for (const at of texts) {
       instants.push(studyInstant(at, instant, scene));
       scene.receptors.forEach((receptor, index) => {
         receptorRows[index]?.push(receptorInstant(at, instant, receptor));
@@ -137,7 +143,7 @@ async function computeLight(
     instants: inOrder(instants),
     receptors: scene.receptors.map((receptor, index) => ({
       id: receptor.id,
-      openArea: roundArea(receptor.openAreaM2),
+      openArea: receptor.front === null ? roundArea(receptor.openAreaM2) : null,
       instants: inOrder(receptorRows[index] ?? []),
     })),
     shadows: inOrder(shadows),
@@ -158,38 +164,32 @@ function reachOfReceptors({ receptors }: Scene, plans: readonly ClausePlan[]): R
   };
 }
 
+function ringsOf(plans: readonly ClausePlan[]): SceneReceptor[] {
+  return plans.flatMap((plan) =>
+    plan.receptors.flatMap(({ receptor }) => (receptor.class === 'ring' ? [receptor] : [])),
+  );
+}
+
 function listedInstants(input: StudyInput): string[] {
   return [...new Set(input.instants ?? defaultInstants(input))];
 }
 
-interface WantedInstant {
-  /** The listed texts of the instant: the same one can be written with two offsets. */
-  listed: string[];
-  judgedDates: string[];
-}
-
-/** Every instant to compute, once, in the order of time. */
+/** Every instant to compute, once, in the order of time, with the listed texts of it: the same one can be written with two offsets. */
 function instantsByMs(
   listed: readonly string[],
   plans: readonly ClausePlan[],
-): Map<number, WantedInstant> {
-  const wanted = new Map<number, { listed: Set<string>; judgedDates: Set<string> }>();
+): Map<number, string[]> {
+  const wanted = new Map<number, Set<string>>();
   const at = (atMs: number) => {
-    const found = wanted.get(atMs) ?? { listed: new Set(), judgedDates: new Set() };
+    const found = wanted.get(atMs) ?? new Set();
     wanted.set(atMs, found);
     return found;
   };
-  for (const text of listed) at(Date.parse(text)).listed.add(text);
-  for (const plan of plans) {
-    for (const [date, spans] of plan.spansOfDate) {
-      for (const atMs of spans.flat()) at(atMs).judgedDates.add(date);
-    }
+  for (const text of listed) at(Date.parse(text)).add(text);
+  for (const { spansOfDate } of plans) {
+    for (const atMs of [...spansOfDate.values()].flat(2)) at(atMs);
   }
-  return new Map(
-    [...wanted]
-      .sort(([a], [b]) => a - b)
-      .map(([atMs, one]) => [atMs, { listed: [...one.listed], judgedDates: [...one.judgedDates] }]),
-  );
+  return new Map([...wanted].sort(([a], [b]) => a - b).map(([atMs, texts]) => [atMs, [...texts]]));
 }
 
 function studyInstant(at: string, instant: InstantLight, scene: Scene): StudyInstant {
@@ -209,6 +209,7 @@ function receptorInstant(
   instant: InstantLight,
   receptor: Scene['receptors'][number],
 ): ReceptorResult['instants'][number] {
-  const light = instant.lightOn(receptor, receptor.planeM);
-  return { at, sunBefore: roundArea(light.sunBeforeM2), sunAfter: roundArea(light.sunAfterM2) };
+  const { sunBeforeM2, sunAfterM2 } = instant.lightOn(receptor, receptor.planeM);
+  const round = receptor.front === null ? roundArea : roundMeasure;
+  return { at, sunBefore: round(sunBeforeM2), sunAfter: round(sunAfterM2) };
 }

@@ -23,7 +23,10 @@ export function crossCheckReceptors(
   check: CrossCheck,
 ): void {
   const shaded = scene.receptors.filter(
-    (receptor) => receptor.planeM === 0 && instant.lightOn(receptor, 0).netNewM2 >= leastNetNewM2,
+    (receptor) =>
+      receptor.front === null &&
+      receptor.planeM === 0 &&
+      instant.lightOn(receptor, 0).netNewM2 >= leastNetNewM2,
   );
   const drawnM2 = overlapAreasM2(
     clipper,

@@ -1,5 +1,9 @@
 import { z } from 'zod';
-import { polygonalSchema } from '../geometry/geojson-schema.ts';
+import {
+  isPolygonal,
+  polygonalSchema,
+  receptorGeometrySchema,
+} from '../geometry/geojson-schema.ts';
 import { receptorClassSchema, ruleSchema } from '../rules/rule-schema.ts';
 
 export const evidenceFormat = 'noonmark-study/1';
@@ -40,21 +44,42 @@ const blockFeatureSchema = z.strictObject({
 });
 export type EvidenceBlock = z.infer<typeof blockFeatureSchema>;
 
-const receptorFeatureSchema = z.strictObject({
-  type: z.literal('Feature').default('Feature'),
-  properties: z.strictObject({
-    id: z.string().min(1).max(100),
-    class: receptorClassSchema,
-    label: z.string().max(200).default(''),
-    /** Height in metres above the datum at which its shadow is taken. */
-    plane: z.number().default(0),
-    /** A collector's slope in degrees from the horizontal; it enters energy only. */
-    tilt: z.number().min(0).max(90).optional(),
-    /** The direction that the slope faces, degrees clockwise from true north. */
-    facing: z.number().min(0).lt(360).optional(),
-  }),
-  geometry: polygonalSchema,
-});
+const receptorFeatureSchema = z
+  .strictObject({
+    type: z.literal('Feature').default('Feature'),
+    properties: z.strictObject({
+      id: z.string().min(1).max(100),
+      class: receptorClassSchema,
+      label: z.string().max(200).default(''),
+      /** Height in metres above the datum at which its shadow is taken. */
+      plane: z.number().default(0),
+      /** Slope in degrees from the horizontal; it enters energy only. A window stands upright. */
+      tilt: z.number().min(0).max(90).optional(),
+      /** The direction that the slope or the window faces, degrees clockwise from true north. */
+      facing: z.number().min(0).lt(360).optional(),
+    }),
+    /** A window is a Point or a LineString on its façade, everything else an area. */
+    geometry: receptorGeometrySchema,
+  })
+  .superRefine(({ properties, geometry }, context) => {
+    const isWindow = properties.class === 'window';
+    if (isWindow === isPolygonal(geometry)) {
+      context.addIssue({
+        code: 'custom',
+        path: ['geometry', 'type'],
+        message: isWindow
+          ? 'a window is a Point or a LineString on its façade'
+          : 'only a window can be a Point or a LineString',
+      });
+    }
+    if (isWindow && properties.facing === undefined) {
+      context.addIssue({
+        code: 'custom',
+        path: ['properties', 'facing'],
+        message: 'say which way the window faces, in degrees clockwise from true north',
+      });
+    }
+  });
 export type EvidenceReceptor = z.infer<typeof receptorFeatureSchema>;
 
 const uniqueIds = (features: { properties: { id: string } }[], context: z.RefinementCtx) => {
@@ -134,7 +159,7 @@ const clauseResultSchema = z.strictObject({
       met: z.boolean(),
     }),
   ),
-  /** Spacing of sample points; null for measures over the area, which use none. */
+  /** Metres between sample points; null for measures over the area, which use none. */
   spacingM: z.number().nullable(),
   /** The finding as one plain sentence. */
   note: z.string(),
@@ -170,8 +195,10 @@ export const studyInstantSchema = z.strictObject({
 export type StudyInstant = z.infer<typeof studyInstantSchema>;
 
 export const receptorResultSchema = z.strictObject({
+  /** A receptor's id, or `ring:` and the id of the clause that judges the ring. */
   id: z.string(),
-  openArea: z.number(),
+  /** m²; null for a window, whose sun is given in shares from 0 to 1. */
+  openArea: z.number().nullable(),
   instants: z.array(
     z.strictObject({ at: instantSchema, sunBefore: z.number(), sunAfter: z.number() }),
   ),

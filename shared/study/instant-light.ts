@@ -8,6 +8,7 @@ import {
 } from '../shadow/shadow-layer.ts';
 import { sunPositionAt, type SunPosition } from '../solar/sun-position.ts';
 import type { StudyInput } from './evidence-schema.ts';
+import { measureLight } from './measure-light.ts';
 import type { Scene, SceneReceptor } from './scene.ts';
 
 /** One instant of a scene: the sun, and the light on any receptor at any plane, each worked out once. */
@@ -64,7 +65,7 @@ export function lightAtInstant(
       if (plane === null) return noLight;
       const known = plane.lights.get(receptor);
       if (known !== undefined) return known;
-      const light = scene.measures.light(receptor.area, plane.layer);
+      const light = measureLight(scene, receptor, plane.layer, sun);
       plane.lights.set(receptor, light);
       return light;
     },

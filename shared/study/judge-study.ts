@@ -1,38 +1,47 @@
-import type { DayLight } from '../rules/day-light.ts';
 import { describeFinding } from '../rules/finding-sentence.ts';
-import { beamEnergyKwh, judgeReceptor, type ClauseJudgement } from '../rules/judge-receptor.ts';
-import type { ReceptorClass, RuleClause } from '../rules/rule-schema.ts';
-import { makeDayLight, type ClausePlan, type JudgedReceptor } from './clause-plan.ts';
+import {
+  createReceptorJudge,
+  type ClauseJudgement,
+  type ReceptorJudge,
+} from '../rules/judge-receptor.ts';
+import type { RuleClause } from '../rules/rule-schema.ts';
+import type { PointSampler } from '../shadow/point-light.ts';
+import type { SamplePoints } from '../shadow/sample-points.ts';
+import type { IndexedBlocks } from '../shadow/shadow-layer.ts';
+import type { ClausePlan, JudgedReceptor } from './clause-plan.ts';
+import { createDayGatherer, emptyDayLight, type DayGatherer } from './day-gatherer.ts';
 import type { ClauseResult, StudyFindings, StudyInput } from './evidence-schema.ts';
 import type { InstantLight } from './instant-light.ts';
 import { roundByUnit, roundMeasure } from './rounding.ts';
 
 /** Gathers the light of judged instants as they are computed, and judges when all are there. */
 export interface StudyJudge {
-  /** Takes what an instant of a judged date holds for every clause that wants it. */
-  take: (date: string, instant: InstantLight) => void;
+  /**
+   * Takes what an instant holds for every clause that wants it. A day's light is let go as soon as
+   * the day is judged.
+   *
+   * @param lightOf the light of the instant where these blocks stand
+   */
+  take: (atMs: number, lightOf: (blocks: IndexedBlocks) => InstantLight) => void;
   judge: () => { results: Map<string, ClauseResult[]>; findings: StudyFindings };
 }
 
 /**
  * Makes the judge of a study's clauses.
+ *
+ * @param blocksOf what stands for a clause: with or without what is approved nearby
  */
-export function createStudyJudge(plans: readonly ClausePlan[], input: StudyInput): StudyJudge {
-  // For each clause and receptor, the light by instant.
-  const lights = plans.map((plan) =>
-    plan.receptors.map(() => new Map<number, ReturnType<InstantLight['lightOn']>>()),
-  );
-  const wanted = plans.map(
-    (plan) =>
-      new Map([...plan.spansOfDate].map(([date, spans]) => [date, new Set(spans.flat())] as const)),
-  );
+export function createStudyJudge(
+  plans: readonly ClausePlan[],
+  input: StudyInput,
+  sampler: PointSampler,
+  blocksOf: (plan: ClausePlan) => IndexedBlocks,
+): StudyJudge {
+  const judges = plans.map((plan) => createClauseJudge(plan, input, sampler));
   return {
-    take: (date, instant) => {
-      plans.forEach((plan, planIndex) => {
-        if (wanted[planIndex]?.get(date)?.has(instant.atMs) !== true) return;
-        plan.receptors.forEach(({ receptor, planeM }, index) => {
-          lights[planIndex]?.[index]?.set(instant.atMs, instant.lightOn(receptor, planeM));
-        });
+    take: (atMs, lightOf) => {
+      plans.forEach((plan, index) => {
+        judges[index]?.take(atMs, () => lightOf(blocksOf(plan)));
       });
     },
     judge: () => {
@@ -41,25 +50,16 @@ export function createStudyJudge(plans: readonly ClausePlan[], input: StudyInput
       const clauses = plans.map((plan, planIndex) => {
         const notMet: string[] = [];
         plan.receptors.forEach((judged, index) => {
-          const known = lights[planIndex]?.[index];
-          const days = daysOf(plan, judged, input, (atMs) => {
-            const light = known?.get(atMs);
-            if (light === undefined) throw new Error('A judged instant was never computed.');
-            return light;
-          });
-          const judgements = judgeReceptor(
-            plan.clause,
-            plan.groups,
-            input.rule.bands,
-            (date) => days.get(date) ?? { date, areaM2: judged.areaM2, spans: [] },
-          );
+          const judge = judges[planIndex]?.receptors[index];
+          if (judge === undefined) return;
+          const judgements = judge.judge();
           const { id } = judged.receptor;
           if (judgements.some(({ finding }) => finding === 'not-met')) notMet.push(id);
           results.set(id, [
             ...(results.get(id) ?? []),
-            ...judgements.map((one) => resultOf(plan.clause, one, judged.receptor)),
+            ...judgements.map((one) => resultOf(plan.clause, one, judged)),
           ]);
-          energies.push(energyOf(plan.clause, [...days.values()]));
+          energies.push({ weight: plan.clause.weight, ...judge.energyKwh() });
         });
         return {
           clause: plan.clause.id,
@@ -79,24 +79,55 @@ export function createStudyJudge(plans: readonly ClausePlan[], input: StudyInput
   };
 }
 
-interface Energy {
-  weight: number;
-  beforeKwh: number;
-  afterKwh: number;
+interface ClauseJudge {
+  receptors: ReceptorJudge[];
+  take: (atMs: number, light: () => InstantLight) => void;
 }
 
-function daysOf(
+function createClauseJudge(
   plan: ClausePlan,
-  judged: JudgedReceptor,
   input: StudyInput,
-  lightAt: (atMs: number) => ReturnType<InstantLight['lightOn']>,
-): Map<string, DayLight> {
-  return new Map(
-    [...plan.spansOfDate].map(([date, spans]) => [
-      date,
-      makeDayLight(date, judged, spans, lightAt, input),
-    ]),
-  );
+  sampler: PointSampler,
+): ClauseJudge {
+  const { clause, groups, spansOfDate } = plan;
+  const receptors = plan.receptors.map(() => createReceptorJudge(clause, groups, input.rule.bands));
+  const datesAt = new Map<number, string[]>();
+  for (const [date, spans] of spansOfDate) {
+    for (const atMs of new Set(spans.flat())) {
+      datesAt.set(atMs, [...(datesAt.get(atMs) ?? []), date]);
+    }
+    if (spans.length > 0) continue;
+    plan.receptors.forEach((judged, index) => {
+      receptors[index]?.takeDay(emptyDayLight(date, judged));
+    });
+  }
+  const gatherers = new Map<string, DayGatherer>();
+  const gathererOf = (date: string) => {
+    const gatherer =
+      gatherers.get(date) ??
+      createDayGatherer(date, spansOfDate.get(date) ?? [], plan.receptors, input, sampler);
+    gatherers.set(date, gatherer);
+    return gatherer;
+  };
+  return {
+    receptors,
+    take: (atMs, light) => {
+      for (const date of datesAt.get(atMs) ?? []) {
+        const gatherer = gathererOf(date);
+        gatherer.take(light());
+        if (!gatherer.isComplete()) continue;
+        gatherer.dayLights().forEach((day, index) => receptors[index]?.takeDay(day));
+        gatherers.delete(date);
+      }
+    },
+  };
+}
+
+/** kWh of clear-sky beam on a receptor. */
+interface Energy {
+  weight: number;
+  before: number;
+  after: number;
 }
 
 function findingOfClause(plan: ClausePlan, notMet: readonly string[]) {
@@ -104,28 +135,21 @@ function findingOfClause(plan: ClausePlan, notMet: readonly string[]) {
   return notMet.length === 0 ? ('met' as const) : ('not-met' as const);
 }
 
-function energyOf(clause: RuleClause, days: readonly DayLight[]): Energy {
-  return {
-    weight: clause.weight,
-    beforeKwh: beamEnergyKwh(days, 'before'),
-    afterKwh: beamEnergyKwh(days, 'after'),
-  };
-}
-
 /** 0 to 100: weighted energy lost over weighted energy before, of the receptors that lose any. */
 function lossIndex(energies: readonly Energy[]): number {
-  const losing = energies.filter(({ beforeKwh, afterKwh }) => beforeKwh - afterKwh > 1e-9);
+  const losing = energies.filter(({ before, after }) => before - after > 1e-9);
   const sum = (valueOf: (energy: Energy) => number) =>
     losing.reduce((total, energy) => total + energy.weight * valueOf(energy), 0);
-  const before = sum(({ beforeKwh }) => beforeKwh);
-  return before > 0 ? (100 * sum(({ beforeKwh, afterKwh }) => beforeKwh - afterKwh)) / before : 0;
+  const before = sum((energy) => energy.before);
+  return before > 0 ? (100 * sum((energy) => energy.before - energy.after)) / before : 0;
 }
 
 function resultOf(
   clause: RuleClause,
   judgement: ClauseJudgement,
-  receptor: { class: ReceptorClass; label: string },
+  { receptor, samples }: JudgedReceptor,
 ): ClauseResult {
+  const spacingM = spacingOf(receptor.front?.points ?? samples);
   return {
     clause: clause.id,
     day: judgement.day,
@@ -142,8 +166,13 @@ function resultOf(
       margin: roundByUnit(test.margin, test.unit),
       met: test.met,
     })),
-    spacingM: null,
-    note: describeFinding(clause, judgement, receptor.class, receptor.label),
+    spacingM,
+    note: describeFinding(clause, judgement, receptor.class, receptor.label, spacingM),
     ...(judgement.daysNotMet === null ? {} : { daysNotMet: judgement.daysNotMet }),
   };
+}
+
+/** The light of a window is always taken at points, that of an area where a measure asks for it. */
+function spacingOf(points: SamplePoints | null): number | null {
+  return points === null || points.spacingM === null ? null : roundMeasure(points.spacingM);
 }

@@ -1,4 +1,4 @@
-import type { Polygonal } from '../geometry/geojson-schema.ts';
+import { isPolygonal, type Polygonal } from '../geometry/geojson-schema.ts';
 import { createLocalPlane, type LocalPlane } from '../geometry/local-plane.ts';
 import { polygonsOf } from '../geometry/project-polygon.ts';
 import { signedRingArea } from '../geometry/ring.ts';
@@ -20,8 +20,8 @@ const leastBackwardM2 = 1e-6;
 
 /**
  * Reads a study's input: checks its form, fills in every default, and checks what the form cannot
- * say: footprints that cross themselves, and windows without sun. Members `results` and `digest` of
- * an evidence file must be taken away first.
+ * say: footprints that cross themselves, a site that a clause needs, and windows without sun. Members
+ * `results` and `digest` of an evidence file must be taken away first.
  */
 export function readStudyInput(value: unknown): ReadStudyInput {
   const parsed = studyInputSchema.safeParse(value);
@@ -34,7 +34,11 @@ export function readStudyInput(value: unknown): ReadStudyInput {
       })),
     };
   }
-  const issues = [...footprintIssues(parsed.data), ...windowIssues(parsed.data)];
+  const issues = [
+    ...footprintIssues(parsed.data),
+    ...siteIssues(parsed.data),
+    ...windowIssues(parsed.data),
+  ];
   return issues.length === 0 ? { ok: true, input: parsed.data } : { ok: false, issues };
 }
 
@@ -57,7 +61,7 @@ function footprintIssues(input: StudyInput): InputIssue[] {
   };
   const inCollection = (name: 'blocks' | 'receptors') =>
     input[name].features.flatMap(({ geometry }, index) =>
-      issuesOf(geometry, `${name}.features.${index}.geometry`),
+      isPolygonal(geometry) ? issuesOf(geometry, `${name}.features.${index}.geometry`) : [],
     );
   return [
     ...(input.site === undefined ? [] : issuesOf(input.site, 'site')),
@@ -72,6 +76,22 @@ function hasEmptyShell(geometry: Polygonal, plane: LocalPlane): boolean {
     ([shell = []]) =>
       Math.abs(signedRingArea(shell.map((lngLat) => plane.toPlane(lngLat)))) < leastBackwardM2,
   );
+}
+
+/** A wall and a ring are measured from the site's boundary. */
+function siteIssues({ site, rule }: StudyInput): InputIssue[] {
+  if (site !== undefined) return [];
+  const clause = rule.clauses.find(
+    ({ baseline, receptors }) => typeof baseline === 'object' || receptors.ring !== undefined,
+  );
+  return clause === undefined
+    ? []
+    : [
+        {
+          path: 'site',
+          message: `clause ${clause.id} is measured from the site's boundary; send the site`,
+        },
+      ];
 }
 
 function windowIssues(input: StudyInput): InputIssue[] {

@@ -7,10 +7,13 @@ import { formatInstant, wholeClockHours } from '../solar/civil-time.ts';
 import { keyDatesOfYear } from '../solar/key-dates.ts';
 import { sunAboveSpans } from '../solar/sun-above.ts';
 import { sunPositionAt } from '../solar/sun-position.ts';
-import { beamOnReceptorWm2, skyOf } from './clause-plan.ts';
+import { beamOnReceptorWm2, skyOf } from './clear-sky.ts';
 import type { StudyInput } from './evidence-schema.ts';
+import { measureLight } from './measure-light.ts';
 import { roundArea, roundEnergy, roundMeasure } from './rounding.ts';
 import { buildScene, type Scene, type SceneReceptor } from './scene.ts';
+
+type LedgerSpan = Pick<SpanLight, 'atMs' | 'lights' | 'beamWm2'>;
 
 /** The share of a receptor's open area whose loss counts as losing the sun there. */
 const noticedShare = 0.05;
@@ -38,7 +41,7 @@ export function computeReceptorLedger(
     class: receptor.class,
     label: receptor.label,
     planeM: receptor.planeM,
-    openAreaM2: roundArea(receptor.openAreaM2),
+    openAreaM2: receptor.front === null ? roundArea(receptor.openAreaM2) : null,
     stepMin,
     days: keyDatesOfYear(input.year, input.place.timezone).map(({ event, date }) => ({
       event,
@@ -122,7 +125,7 @@ function lightThrough(
   receptor: SceneReceptor,
   date: string,
   { startMs, endMs, stepMin }: { startMs: number; endMs: number; stepMin: number },
-): SpanLight {
+): LedgerSpan {
   const atMs = instantsOfSpan({ startMs, endMs }, stepMin);
   const sky = skyOf(date, input);
   return {
@@ -131,16 +134,16 @@ function lightThrough(
       const sun = sunPositionAt(at, input.place.longitude, input.place.latitude);
       const { area, planeM } = receptor;
       const standing = blocksTowardSun(scene.blocks, sun, area.box, planeM);
-      return scene.measures.light(area, createShadowCaster(standing, sun)(planeM));
+      return measureLight(scene, receptor, createShadowCaster(standing, sun)(planeM), sun);
     }),
     beamWm2: atMs.map((at) => beamOnReceptorWm2(at, receptor, sky, input)),
   };
 }
 
 /** Before, after and lost over some spans: mean hours, m² × hours and kWh/m². */
-function account(spans: readonly SpanLight[], openAreaM2: number) {
+function account(spans: readonly LedgerSpan[], openAreaM2: number) {
   const balance = (
-    valueAt: (span: SpanLight, index: number, areaM2: number) => number,
+    valueAt: (span: LedgerSpan, index: number, areaM2: number) => number,
     round: (value: number) => number,
   ) => {
     const total = (state: 'sunBeforeM2' | 'sunAfterM2') =>

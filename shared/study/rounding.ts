@@ -10,7 +10,7 @@ function round(value: number, perUnit: number): number {
 
 /** A measure's value by its unit: areas to 0.01, energy to 0.001, hours and shares to 0.0001. */
 export function roundByUnit(value: number, unit: string): number {
-  if (unit === 'm²·h') return roundArea(value);
+  if (unit === 'm²·h' || unit === 'm²') return roundArea(value);
   if (unit === 'kWh/m²') return roundEnergy(value);
   return roundMeasure(value);
 }

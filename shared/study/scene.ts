@@ -2,14 +2,9 @@ import { flattenRings } from '../geometry/flat-rings.ts';
 import type { Polygonal } from '../geometry/geojson-schema.ts';
 import { createLocalPlane, type LocalPlane } from '../geometry/local-plane.ts';
 import { projectPolygon } from '../geometry/project-polygon.ts';
-import { boxesOverlap, boxOfRings, signedRingArea, type Ring } from '../geometry/ring.ts';
-import type { ReceptorClass } from '../rules/rule-schema.ts';
-import {
-  createLightMeasures,
-  makeLitArea,
-  type LightMeasures,
-  type LitArea,
-} from '../shadow/receptor-light.ts';
+import { boxOfRings, type Ring } from '../geometry/ring.ts';
+import { createPointSampler, type PointSampler } from '../shadow/point-light.ts';
+import { createLightMeasures, type LightMeasures } from '../shadow/receptor-light.ts';
 import {
   indexBlocks,
   type IndexedBlocks,
@@ -18,23 +13,9 @@ import {
 } from '../shadow/shadow-layer.ts';
 import { createWindingSweep } from '../shadow/winding-sweep.ts';
 import type { EvidenceBlock, StudyInput } from './evidence-schema.ts';
+import { makeSceneReceptor, type SceneReceptor } from './scene-receptor.ts';
 
-/** A receptor on the local plane. */
-export interface SceneReceptor {
-  id: string;
-  class: ReceptorClass;
-  label: string;
-  planeM: number;
-  tiltDeg: number;
-  facingDeg: number;
-  area: LitArea;
-  /** m², less what lies on the site. */
-  wholeAreaM2: number;
-  /** m², less the site and the context that stands through the receptor's plane. */
-  openAreaM2: number;
-  /** More than half of it lies on the site: it is shown and not judged. */
-  isOnSite: boolean;
-}
+export type { SceneReceptor };
 
 /** A study's input on the local plane, ready to be computed. */
 export interface Scene {
@@ -46,6 +27,7 @@ export interface Scene {
   receptors: SceneReceptor[];
   siteRings: Ring[];
   measures: LightMeasures;
+  sampler: PointSampler;
 }
 
 /** Builds the scene of a study's input. Blocks `by-right` belong to a baseline alone and stay out. */
@@ -59,41 +41,25 @@ export function buildScene(input: StudyInput): Scene {
     return role === 'approved' || role === 'by-right' ? [] : [standing(block, role)];
   });
   const approved = input.blocks.features.filter(({ properties }) => properties.role === 'approved');
-  const context = blocks.filter(({ role }) => role === 'context');
+  const indexed = indexBlocks(blocks);
+  const surroundings = {
+    plane,
+    siteRings,
+    measures,
+    blocks: indexed,
+    gridM: input.settings.gridM,
+  };
   return {
     plane,
-    blocks: indexBlocks(blocks),
+    blocks: indexed,
     cumulativeBlocks:
       approved.length === 0
         ? null
         : indexBlocks([...blocks, ...approved.map((block) => standing(block, 'context'))]),
-    receptors: input.receptors.features.map(({ properties, geometry }) => {
-      const rings = projectPolygon(geometry, plane);
-      const area = makeLitArea(rings, siteRings);
-      const planeM = properties.plane;
-      const wholeAreaM2 = measures.openArea(area, []);
-      const standsOn = context.filter(
-        (block) =>
-          block.baseM <= planeM && planeM < block.topM && boxesOverlap(block.box, area.box),
-      );
-      return {
-        id: properties.id,
-        class: properties.class,
-        label: properties.label === '' ? properties.id : properties.label,
-        planeM,
-        tiltDeg: properties.tilt ?? 0,
-        facingDeg: properties.facing ?? 0,
-        area,
-        wholeAreaM2,
-        openAreaM2: measures.openArea(
-          area,
-          standsOn.flatMap((block) => block.rings),
-        ),
-        isOnSite: wholeAreaM2 < 0.5 * rings.reduce((sum, ring) => sum + signedRingArea(ring), 0),
-      };
-    }),
+    receptors: input.receptors.features.map((feature) => makeSceneReceptor(feature, surroundings)),
     siteRings,
     measures,
+    sampler: createPointSampler(),
   };
 }
 
@@ -113,7 +79,8 @@ export function backwardAreaM2(geometry: Polygonal, plane: LocalPlane): number {
   return areas[0] ?? 0;
 }
 
-function makeBlock(block: EvidenceBlock, role: ShadowRole, plane: LocalPlane): SceneBlock {
+/** A block of a study's input on the local plane, in a role of its own. */
+export function makeBlock(block: EvidenceBlock, role: ShadowRole, plane: LocalPlane): SceneBlock {
   const rings = projectPolygon(block.geometry, plane);
   return {
     role,

@@ -1,5 +1,6 @@
 import { setImmediate as nextTurn } from 'node:timers/promises';
 import type { EntityManager } from '@mikro-orm/postgresql';
+import { isPolygonal } from '../../../shared/geometry/geojson-schema.ts';
 import { keyDatesOfYear } from '../../../shared/solar/key-dates.ts';
 import type { EvidenceFile, StudyInput } from '../../../shared/study/evidence-schema.ts';
 import { listJudgedDays } from '../../../shared/study/judged-days.ts';
@@ -81,14 +82,13 @@ export async function collectReport(
     study: describeEvidence(evidence, study),
     instants: await listReportInstants(em, study),
     findingRows,
-    receptors: evidence.receptors.features
-      .filter(({ properties }) => withLedger.includes(properties.id))
-      .map(({ properties: { id, class: receptorClass, label }, geometry }) => ({
-        id,
-        class: receptorClass,
-        label,
-        geometry,
-      })),
+    receptors: evidence.receptors.features.flatMap(
+      ({ properties: { id, class: receptorClass, label }, geometry }) =>
+        // A window has no outline.
+        withLedger.includes(id) && isPolygonal(geometry)
+          ? [{ id, class: receptorClass, label, geometry }]
+          : [],
+    ),
     ledgers: await computeLedgers(evidence, withLedger),
     publishedComments: comments
       .filter(({ state }) => state === 'published')

@@ -1,15 +1,26 @@
 import { UniqueConstraintViolationException } from '@mikro-orm/core';
 import type { EntityManager } from '@mikro-orm/postgresql';
 import type { CreateRuleVersionInput } from '../../../shared/contracts/rules.ts';
+import { checkRule } from '../../../shared/rules/check-rule.ts';
 import { AppError } from '../../errors.ts';
+import { getMunicipality } from '../settings/get-municipality.ts';
+import { placeOf } from '../studies/study-place.ts';
 import { RuleVersion } from './rule-version.entity.ts';
 
-/** Writes the next version of the municipality's one rule; earlier versions stay as they are. */
+/**
+ * Writes the next version of the municipality's one rule; earlier versions stay as they are. One that
+ * cannot be judged there in the year of its studies is refused.
+ */
 export async function createRuleVersion(
   em: EntityManager,
   { rule, inForceFrom }: CreateRuleVersionInput,
   today: string,
 ): Promise<RuleVersion> {
+  const municipality = await getMunicipality(em);
+  const issues = checkRule(rule, placeOf(municipality), municipality.studyYear);
+  if (issues.length > 0) {
+    refuse(...issues.map(({ path, message }) => ({ path: `rule.${path}`, message })));
+  }
   try {
     return await em.transactional(async (tx) => {
       const latest = await tx.findOne(
@@ -19,13 +30,19 @@ export async function createRuleVersion(
       );
       const nextVersion = (latest?.version ?? 0) + 1;
       if (rule.version !== nextVersion) {
-        refuse('rule.version', `The next version is ${nextVersion}.`);
+        refuse({ path: 'rule.version', message: `The next version is ${nextVersion}.` });
       }
       if (latest !== null && rule.id !== latest.ruleId) {
-        refuse('rule.id', `The rule of this municipality has the id ${latest.ruleId}.`);
+        refuse({
+          path: 'rule.id',
+          message: `The rule of this municipality has the id ${latest.ruleId}.`,
+        });
       }
       if (inForceFrom !== null && inForceFrom < today) {
-        refuse('inForceFrom', 'A version comes into force today at the earliest.');
+        refuse({
+          path: 'inForceFrom',
+          message: 'A version comes into force today at the earliest.',
+        });
       }
       return tx.create(RuleVersion, {
         ruleId: rule.id,
@@ -37,10 +54,13 @@ export async function createRuleVersion(
     });
   } catch (error) {
     if (!(error instanceof UniqueConstraintViolationException)) throw error;
-    return refuse('rule.version', 'Somebody has written this version meanwhile.');
+    return refuse({
+      path: 'rule.version',
+      message: 'Somebody has written this version meanwhile.',
+    });
   }
 }
 
-function refuse(path: string, message: string): never {
-  throw new AppError('INPUT_INVALID', { errors: [{ path, message }] });
+function refuse(...errors: { path: string; message: string }[]): never {
+  throw new AppError('INPUT_INVALID', { errors });
 }

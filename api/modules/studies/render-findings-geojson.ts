@@ -1,12 +1,13 @@
-import type { FeatureCollection, MultiPolygon, Polygon } from 'geojson';
+import type { FeatureCollection } from 'geojson';
 import type { FindingRow } from '../../../shared/contracts/studies.ts';
+import type { ReceptorGeometry } from '../../../shared/geometry/geojson-schema.ts';
 import type { StudyInput } from '../../../shared/study/evidence-schema.ts';
 
 /** The findings table as GeoJSON: a feature for each receptor and row, with the columns as properties. */
 export function renderFindingsGeojson(
   rows: readonly FindingRow[],
   receptors: StudyInput['receptors'],
-): FeatureCollection<Polygon | MultiPolygon | null, FindingRow> {
+): FeatureCollection<ReceptorGeometry | null, FindingRow> {
   const geometries = new Map(
     receptors.features.map(({ properties, geometry }) => [properties.id, geometry]),
   );

@@ -14,6 +14,8 @@ function hold(limit: RuleLimit, value: Partial<MeasuredValue>, measure = hours) 
     after: 3,
     theoretical: 6,
     tolerance: 0.1,
+    whole: 1,
+    coarser: [],
     largestNetNewM2: 0,
     ...value,
   }));
@@ -88,10 +90,13 @@ describe('measures of a day', () => {
   const day: DayLight = {
     date: '2026-12-21',
     areaM2: 100,
+    isWindow: false,
+    samples: null,
     spans: [
       {
         atMs: [0, 3_600_000, 7_200_000, 10_800_000],
         lights: [light(0, 0), light(100, 50), light(100, 0), light(40, 40)],
+        openShares: [1, 1, 1, 1],
         beamWm2: [100, 200, 200, 100],
       },
     ],

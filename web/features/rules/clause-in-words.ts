@@ -1,4 +1,6 @@
 import {
+  sayBaseline,
+  sayRing,
   sayRuleDay,
   sayRuleLimit,
   sayRuleMeasure,
@@ -16,6 +18,7 @@ const classWords = {
   'open-space': 'open spaces',
   collector: 'solar collectors',
   walk: 'walks',
+  window: 'windows',
 } as const satisfies Record<ReceptorClass, string>;
 
 /** One clause of a rule in plain words: what it judges, when, how, and what it asks. */
@@ -26,14 +29,19 @@ export function describeClause(
   const { receptors } = clause;
   const figures: ClauseFigures = {
     inUnit: formats.inUnit,
+    metres: (lengthM) => `${formats.number(lengthM, 2)} m`,
     percent: formats.share,
     whole: formats.number,
     monthDay: (text) => formats.dayOfYear(`2000-${text}`),
   };
-  const classes = joinWords(
-    receptors.classes.map((one) => classWords[one]),
-    'and',
-  );
+  const judged =
+    receptors.ring === undefined
+      ? joinWords(
+          receptors.classes.map((one) => classWords[one]),
+          'and',
+        )
+      : sayRing(receptors.ring, figures);
+  const baseline = sayBaseline(clause.baseline, figures);
   const area =
     receptors.of === 'open'
       ? 'their open area, without what buildings stand on'
@@ -41,7 +49,7 @@ export function describeClause(
   const plane =
     receptors.plane === undefined ? '' : `, at ${formats.length(receptors.plane)} above the ground`;
   return [
-    { label: 'Judged', value: `${classes}: ${area}${plane}` },
+    { label: 'Judged', value: `${judged}: ${area}${plane}` },
     {
       label: 'Days',
       value: joinWords(
@@ -58,7 +66,8 @@ export function describeClause(
       }`,
     },
     { label: 'Measured', value: sayRuleMeasure(clause.measure, figures) },
-    { label: 'Asked', value: sayRuleLimit(clause.limit, clause.measure, figures) },
+    ...(baseline === null ? [] : [{ label: 'Held against', value: baseline }]),
+    { label: 'Asked', value: sayRuleLimit(clause.limit, clause.measure, figures, clause.baseline) },
     { label: 'Not counted', value: describeDisregard(clause.disregard, formats) },
   ];
 }

@@ -1,4 +1,5 @@
 import type { FindingRow } from '../../../shared/contracts/studies.ts';
+import { isPolygonal } from '../../../shared/geometry/geojson-schema.ts';
 import type { MapBlock, MapReceptor } from '../../map/map-features.ts';
 import type { DrawnEvidence } from './api/get-study-evidence.ts';
 import { worstFinding } from './sun-losers.ts';
@@ -21,9 +22,10 @@ export function mapReceptorsOf(
   for (const { receptor, finding } of rows) {
     findings.set(receptor, [...(findings.get(receptor) ?? []), finding]);
   }
-  return evidence.receptors.features.map(({ properties, geometry }) => ({
-    ...properties,
-    finding: worstFinding(findings.get(properties.id) ?? []),
-    geometry,
-  }));
+  // Windows have no area to be drawn.
+  return evidence.receptors.features.flatMap(({ properties, geometry }) =>
+    isPolygonal(geometry)
+      ? [{ ...properties, finding: worstFinding(findings.get(properties.id) ?? []), geometry }]
+      : [],
+  );
 }

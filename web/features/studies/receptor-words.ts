@@ -4,6 +4,8 @@ const words: Partial<Record<string, string>> = {
   'open-space': 'open space',
   collector: 'roof collector',
   walk: 'walk',
+  window: 'window',
+  ring: 'ground around the site',
 };
 
 /** What a class of receptor is called in a table. */

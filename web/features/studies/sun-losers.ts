@@ -82,13 +82,15 @@ function hourlySamples(
   { openArea, instants }: DrawnEvidence['results']['receptors'][number],
   date: string,
 ): SunSample[] {
-  if (openArea <= 0) return [];
+  // A window's sun is given in shares of it.
+  const wholeM2 = openArea ?? 1;
+  if (wholeM2 <= 0) return [];
   return instants
     .filter(({ at }) => at.startsWith(date))
     .map(({ at, sunBefore, sunAfter }) => ({
       atMs: Date.parse(at),
-      shareBefore: sunBefore / openArea,
-      shareAfter: sunAfter / openArea,
+      shareBefore: sunBefore / wholeM2,
+      shareAfter: sunAfter / wholeM2,
     }));
 }
 

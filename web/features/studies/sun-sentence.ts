@@ -13,6 +13,7 @@ const subjects: Partial<Record<string, string>> = {
   'open-space': 'this open space',
   collector: 'this solar collector',
   walk: 'this walk',
+  window: 'this window',
 };
 
 /** What a receptor of a class is called in a sentence about itself. */

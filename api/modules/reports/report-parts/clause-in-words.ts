@@ -1,6 +1,8 @@
 import type { CivilTimeFormat } from '../../../../shared/drawing/civil-time-format.ts';
 import type { FigureFormat } from '../../../../shared/drawing/figure-format.ts';
 import {
+  sayBaseline,
+  sayRing,
   sayRuleDay,
   sayRuleLimit,
   sayRuleMeasure,
@@ -35,11 +37,16 @@ export function sayClause(
   const { minutes, area } = clause.disregard;
   const words = clauseFigures(time, figures);
   return {
-    receptors: sayReceptors(clause),
+    receptors: sayReceptors(clause, words),
     days: sayDays(clause, judgedDays, time, words),
     hours: sayHours(clause, judgedDays, time, figures, words),
     measure: sayRuleMeasure(clause.measure, words),
-    limit: sayRuleLimit(clause.limit, clause.measure, words),
+    limit: [
+      sayBaseline(clause.baseline, words),
+      sayRuleLimit(clause.limit, clause.measure, words, clause.baseline),
+    ]
+      .filter((part) => part !== null)
+      .join(': '),
     disregard:
       minutes === 0
         ? null
@@ -47,15 +54,18 @@ export function sayClause(
   };
 }
 
-function sayReceptors({ receptors }: RuleClause): string {
-  const kinds = receptors.classes.map((one) => `every ${nameReceptorClass(one)}`).join(', ');
+function sayReceptors({ receptors }: RuleClause, words: ClauseFigures): string {
+  const kinds =
+    receptors.ring === undefined
+      ? `${receptors.classes.map((one) => `every ${nameReceptorClass(one)}`).join(', ')} outside the site`
+      : sayRing(receptors.ring, words);
   const which =
     receptors.of === 'open'
       ? 'its open ground, less what buildings around stand on'
       : 'the whole of it';
   const plane =
     receptors.plane === undefined ? '' : `, taken ${receptors.plane} m above the ground`;
-  return `${kinds} outside the site: ${which}${plane}`;
+  return `${kinds}: ${which}${plane}`;
 }
 
 function sayDays(
@@ -79,6 +89,7 @@ function sayDays(
 function clauseFigures(time: CivilTimeFormat, figures: FigureFormat): ClauseFigures {
   return {
     inUnit: figures.inUnit,
+    metres: (lengthM) => `${lengthM}\u00a0m`,
     percent: figures.percent,
     whole: figures.whole,
     monthDay: (text) => time.monthAndDay(`2000-${text}`),

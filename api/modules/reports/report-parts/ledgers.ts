@@ -55,7 +55,7 @@ function ledgerEntry(scene: ReportScene, ledger: SunLedger): Content {
           number === undefined ? '' : { text: `No. ${number}   `, color: palette.madder },
           ledger.label,
           {
-            text: `   ${nameReceptorClass(ledger.class)}, ${figures.area(ledger.openAreaM2)} of open ground`,
+            text: `   ${nameReceptorClass(ledger.class)}${ledger.openAreaM2 === null ? '' : `, ${figures.area(ledger.openAreaM2)} of open ground`}`,
             style: 'plain',
             fontSize: 8.5,
           },

@@ -104,4 +104,5 @@ const receptorClassWords: Record<ReceptorClass, string> = {
   'open-space': 'open space',
   collector: 'solar collector',
   walk: 'walk',
+  window: 'window',
 };

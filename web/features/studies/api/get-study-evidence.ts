@@ -1,6 +1,9 @@
 import { queryOptions, useQuery } from '@tanstack/react-query';
 import { z } from 'zod';
-import { polygonalSchema } from '../../../../shared/geometry/geojson-schema.ts';
+import {
+  polygonalSchema,
+  receptorGeometrySchema,
+} from '../../../../shared/geometry/geojson-schema.ts';
 import { callApi } from '../../../lib/api-client.ts';
 
 /** Of the evidence file, what the study's page draws: blocks, receptors and their sun hour by hour. */
@@ -17,7 +20,7 @@ const drawnEvidenceSchema = z.object({
     features: z.array(
       z.object({
         properties: z.object({ id: z.string(), class: z.string(), label: z.string() }),
-        geometry: polygonalSchema,
+        geometry: receptorGeometrySchema,
       }),
     ),
   }),
@@ -25,7 +28,7 @@ const drawnEvidenceSchema = z.object({
     receptors: z.array(
       z.object({
         id: z.string(),
-        openArea: z.number(),
+        openArea: z.number().nullable(),
         instants: z.array(
           z.object({ at: z.string(), sunBefore: z.number(), sunAfter: z.number() }),
         ),

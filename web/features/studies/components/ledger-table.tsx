@@ -19,9 +19,11 @@ export function LedgerTable({ ledger }: { ledger: SunLedger }) {
         rowKey={(day) => day.date}
       />
       <p className="text-small text-ink-soft">
-        Hours are means over the {formats.area(ledger.openAreaM2)} of open area, taken every{' '}
-        {ledger.stepMin} minutes at {formats.length(ledger.planeM)} above the ground. Square metre
-        hours are sunlit area times time. Energy is direct sun under a clear sky.
+        {ledger.openAreaM2 === null
+          ? 'Hours are means along the window'
+          : `Hours are means over the ${formats.area(ledger.openAreaM2)} of open area`}
+        , taken every {ledger.stepMin} minutes at {formats.length(ledger.planeM)} above the ground.
+        Square metre hours are sunlit area times time. Energy is direct sun under a clear sky.
       </p>
       {ledger.days.map((day) => (
         <details key={day.date}>
