@@ -1,36 +1,52 @@
 import { useCallback, useMemo } from 'react';
 import { useSearchParams } from 'react-router-dom';
 
-/** What a map shows: its middle and zoom. North is always up and the view is always from above. */
+/** What a map shows: its middle and zoom, and where a tilted view looks. */
 export interface Camera {
   longitude: number;
   latitude: number;
   zoom: number;
+  /** Degrees from straight above; 0 is a plan, and a plan has north up. */
+  tiltDeg: number;
+  /** What is up on the screen, degrees clockwise from true north. */
+  bearingDeg: number;
 }
 
 const parameter = 'view';
+
+/** Flatter views would show more sky than ground. */
+export const mostTiltDeg = 60;
 
 /** Decimals of a degree that still matter at a zoom: a tenth of a pixel. */
 function decimalsAtZoom(zoom: number): number {
   return Math.max(2, Math.ceil((zoom * Math.LN2 + Math.log(512 / 360 / 0.1)) / Math.LN10));
 }
 
-/** `17.25/46.75012/-91.30021`: zoom, latitude, longitude. */
-export function formatCamera({ zoom, latitude, longitude }: Camera): string {
+/** `17.25/46.75012/-91.30021`: zoom, latitude, longitude; a tilted view adds its tilt and bearing. */
+export function formatCamera({ zoom, latitude, longitude, tiltDeg, bearingDeg }: Camera): string {
   const decimals = decimalsAtZoom(zoom);
   const shortZoom = Number(zoom.toFixed(2));
-  return `${shortZoom}/${latitude.toFixed(decimals)}/${longitude.toFixed(decimals)}`;
+  const plan = `${shortZoom}/${latitude.toFixed(decimals)}/${longitude.toFixed(decimals)}`;
+  const [tilt, bearing] = [Math.round(tiltDeg), (Math.round(bearingDeg) + 360) % 360];
+  return tilt === 0 ? plan : `${plan}/${tilt}/${bearing}`;
 }
 
 /** The camera in a search parameter's text, or null where the text holds none. */
 export function parseCamera(text: string | null): Camera | null {
   const parts = text?.split('/') ?? [];
-  if (parts.length !== 3 || parts.some((part) => part.trim() === '')) return null;
-  const [zoom, latitude, longitude] = parts.map(Number);
+  if (![3, 5].includes(parts.length) || parts.some((part) => part.trim() === '')) return null;
+  const [zoom, latitude, longitude, tiltDeg = 0, bearingDeg = 0] = parts.map(Number);
   if (zoom === undefined || latitude === undefined || longitude === undefined) return null;
   const isInside =
-    zoom >= 0 && zoom <= 24 && Math.abs(latitude) <= 85 && Math.abs(longitude) <= 180;
-  return isInside ? { zoom, latitude, longitude } : null;
+    zoom >= 0 &&
+    zoom <= 24 &&
+    Math.abs(latitude) <= 85 &&
+    Math.abs(longitude) <= 180 &&
+    tiltDeg >= 0 &&
+    tiltDeg <= mostTiltDeg &&
+    bearingDeg >= 0 &&
+    bearingDeg < 360;
+  return isInside ? { zoom, latitude, longitude, tiltDeg, bearingDeg } : null;
 }
 
 /**

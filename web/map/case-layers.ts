@@ -11,10 +11,12 @@ export const overlaySources = [
   'shadows',
   'site',
   'blocks',
+  'surroundings',
   'block-labels',
   'receptors',
   'not-met',
   'pins',
+  'measure',
 ] as const;
 export type OverlaySource = (typeof overlaySources)[number];
 
@@ -203,6 +205,8 @@ export const markLayers: LayerSpecification[] = [
 export const pickLayers = {
   pin: 'pins',
   receptor: 'receptors-fill',
+  proposal: 'proposal',
+  building: 'buildings',
   parcel: 'parcels-fill',
 } as const;
 

@@ -3,13 +3,19 @@ import type { InstantShadows } from '../../shared/contracts/studies.ts';
 import type { LngLat, Polygonal } from '../../shared/geometry/geojson-schema.ts';
 import type { Camera } from './camera-in-url.ts';
 import type { ShadowLayer } from './case-layers.ts';
-import type { Bounds, MapBlock, MapPin, MapReceptor } from './map-features.ts';
+import type { Bounds, MapBlock, MapPin, MapReceptor, MapVolume } from './map-features.ts';
 
 /** What lies under the place that a person pointed at. */
 export interface MapPick {
   lngLat: LngLat;
-  parcel: { number: string; address: string } | null;
+  parcel: { number: string; address: string; use: string } | null;
+  /** A building of the base map; heights in metres above the ground. */
+  building: { baseM: number; topM: number } | null;
+  /** The highest proposed block there. */
+  proposal: { baseM: number; topM: number } | null;
+  /** The topmost receptor, and all of them. */
   receptor: string | null;
+  receptors: readonly string[];
   pin: string | null;
 }
 
@@ -23,6 +29,8 @@ export interface CaseMapProps {
   onCameraChange?: (camera: Camera) => void;
   site?: Polygonal | null;
   blocks?: readonly MapBlock[];
+  /** What stands around; with it the map can be tilted. */
+  surroundings?: readonly MapVolume[];
   shadows?: InstantShadows | null;
   layer?: ShadowLayer;
   receptors?: readonly MapReceptor[];
@@ -34,6 +42,8 @@ export interface CaseMapProps {
   mode?: 'look' | 'pick';
   /** A click, or Enter and the space bar for the place in the middle. */
   onPick?: (pick: MapPick) => void;
+  /** Offers to measure distances. */
+  canMeasure?: boolean;
   /** The title block: laid over the map's corner, under it where that is narrow. */
   titleBlock?: ReactNode;
   /** Shown in place of the map where the browser cannot draw it; a plan drawing, a list. */

@@ -1,41 +1,41 @@
 import * as maplibregl from 'maplibre-gl';
 import 'maplibre-gl/dist/maplibre-gl.css';
 import workerUrl from 'maplibre-gl/dist/maplibre-gl-worker.mjs?worker&url';
-import { useEffect, useEffectEvent, useRef, useState } from 'react';
-import { useFormats } from '../lib/place-context.ts';
-import { formatCamera, type Camera } from './camera-in-url.ts';
-import { choiceFilters, layerVisibility, pickLayers, type OverlaySource } from './case-layers.ts';
-import type { CaseMapProps, MapPick } from './case-map-props.ts';
-import {
-  blockFeatures,
-  blockLabelFeatures,
-  collect,
-  middleOf,
-  notMetFeatures,
-  pinFeatures,
-  receptorFeatures,
-} from './map-features.ts';
+import { useEffect, useEffectEvent, useRef, useState, type KeyboardEvent } from 'react';
+import { formatCamera, mostTiltDeg, type Camera } from './camera-in-url.ts';
+import type { CaseMapProps } from './case-map-props.ts';
+import { MapControls } from './map-controls.tsx';
+import { middleOf } from './map-features.ts';
 import { drawMapImages, imagePixelRatio } from './map-images.ts';
 import { metresPerPixel } from './map-scale.ts';
 import { buildMapStyle } from './map-style.ts';
+import { MeasurePanel } from './measure-panel.tsx';
 import { NorthAndScale } from './north-and-scale.tsx';
+import { pickAt } from './pick-at.ts';
+import { useMapContents } from './use-map-contents.ts';
+import { useMeasuring } from './use-measuring.ts';
 
 maplibregl.setWorkerUrl(workerUrl);
 
 /** The name of a move that the person asked for by a button of ours, as map events carry it. */
 const byPerson = { isByPerson: true };
-const fitOptions = { padding: 8, animate: false } as const;
+/** The whole is a plan again: seen from above, with north up. */
+const fitOptions = { padding: 8, animate: false, pitch: 0, bearing: 0 } as const;
+const tiltDeg = 55;
 
 type MapCanvasProps = CaseMapProps & { onTilesMissing: () => void };
 
 /** The drawing itself: creates the map once and carries every change of its props into it. */
 export default function MapCanvas(props: MapCanvasProps) {
   const { label, bounds, camera = null, onCameraChange, mode = 'look', onPick } = props;
+  const { surroundings, canMeasure = false } = props;
   const container = useRef<HTMLDivElement>(null);
   const [map, setMap] = useState<maplibregl.Map | null>(null);
-  const [metresToPixel, setMetresToPixel] = useState<number | null>(null);
+  const [view, setView] = useState<Camera | null>(null);
   const [hasFocus, setHasFocus] = useState(false);
   const lastWritten = useRef<string | null>(null);
+  const measuring = useMeasuring(map);
+  const isTilted = view !== null && view.tiltDeg > 0;
 
   const reportCamera = useEffectEvent((moved: maplibregl.Map) => {
     const now = cameraOf(moved);
@@ -43,7 +43,8 @@ export default function MapCanvas(props: MapCanvasProps) {
     onCameraChange?.(now);
   });
   const reportPick = useEffectEvent((picked: maplibregl.Map, point: maplibregl.Point) => {
-    onPick?.(pickAt(picked, point));
+    if (measuring.isMeasuring) measuring.add(lngLatAt(picked, point));
+    else onPick?.(pickAt(picked, point));
   });
   const reportTilesMissing = useEffectEvent(() => props.onTilesMissing());
   const showFirstView = useEffectEvent((created: maplibregl.Map) => {
@@ -59,9 +60,10 @@ export default function MapCanvas(props: MapCanvasProps) {
       style: buildMapStyle(`${window.location.origin}/api/tiles/{layer}/{z}/{x}/{y}.mvt`),
       minZoom: 11,
       maxZoom: 21,
+      maxPitch: mostTiltDeg,
       // A closer view stretches the largest tile as a whole; cut up, each piece would carry its names.
       zoomLevelsToOverscale: 10,
-      // A plan is seen from above with north up.
+      // A plan is seen from above with north up; the buttons tilt and turn it.
       dragRotate: false,
       pitchWithRotate: false,
       touchPitch: false,
@@ -72,11 +74,9 @@ export default function MapCanvas(props: MapCanvasProps) {
     created.touchZoomRotate.disableRotation();
     created.keyboard.disableRotation();
     showFirstView(created);
-    const measure = () => {
-      setMetresToPixel(metresPerPixel(created.getZoom(), created.getCenter().lat));
-    };
-    measure();
-    created.on('move', measure);
+    const follow = () => setView(cameraOf(created));
+    follow();
+    created.on('move', follow);
     created.on('moveend', (event) => {
       const isByPerson = 'isByPerson' in event || event.originalEvent !== undefined;
       if (isByPerson) reportCamera(created);
@@ -118,134 +118,105 @@ export default function MapCanvas(props: MapCanvasProps) {
     if (map !== null) frameAgain(map);
   }, [map, boundsText]);
 
+  const hasCrosshair = mode === 'pick' || measuring.isMeasuring;
   useEffect(() => {
     const canvas = map?.getCanvas();
     canvas?.setAttribute('aria-label', label);
     canvas?.setAttribute('role', 'application');
     canvas?.setAttribute('aria-roledescription', 'map');
-    if (canvas !== undefined) canvas.style.cursor = mode === 'pick' ? 'crosshair' : '';
-  }, [map, label, mode]);
+    if (canvas !== undefined) canvas.style.cursor = hasCrosshair ? 'crosshair' : '';
+  }, [map, label, hasCrosshair]);
 
-  useMapContents(map, props);
+  useMapContents(map, props, isTilted);
   useChosenInView(map, props);
 
-  const zoomBy = (steps: number) => map?.zoomTo(map.getZoom() + steps, {}, byPerson);
-  const isPickable = onPick !== undefined;
+  const isPickable = onPick !== undefined || measuring.isMeasuring;
+  const actOnKey = (event: KeyboardEvent) => {
+    if (map === null || !hasFocus) return;
+    if (measuring.isMeasuring && event.key === 'Escape') measuring.end();
+    else if (measuring.isMeasuring && event.key === 'Backspace') measuring.takeBack();
+    else if (isPickable && (event.key === 'Enter' || event.key === ' ')) {
+      const middle = map.project(map.getCenter());
+      if (measuring.isMeasuring) measuring.add(lngLatAt(map, middle));
+      else onPick?.(pickAt(map, middle));
+    } else return;
+    event.preventDefault();
+  };
+  const move = (options: maplibregl.EaseToOptions) => map?.easeTo(options, byPerson);
   return (
     <div
       className="absolute inset-0"
       onFocus={(event) => setHasFocus(event.target instanceof HTMLCanvasElement)}
       onBlur={() => setHasFocus(false)}
-      onKeyDown={(event) => {
-        if (map === null || !hasFocus || !isPickable) return;
-        if (event.key !== 'Enter' && event.key !== ' ') return;
-        event.preventDefault();
-        onPick(pickAt(map, map.project(map.getCenter())));
-      }}
+      onKeyDown={actOnKey}
     >
       <div ref={container} className="size-full" />
-      {hasFocus && isPickable ? (
-        <div
-          className="pointer-events-none absolute inset-0 grid place-items-center"
-          aria-hidden="true"
-        >
-          <svg width="36" height="36" stroke="var(--color-ink)" strokeWidth="1.5" fill="none">
-            <path d="M18 2v12M18 22v12M2 18h12M22 18h12" />
-          </svg>
-        </div>
+      {hasFocus && isPickable ? <Cross /> : null}
+      {measuring.isMeasuring ? (
+        <MeasurePanel
+          points={measuring.points}
+          onTakeBack={measuring.takeBack}
+          onDone={measuring.end}
+        />
       ) : null}
-      <div className="no-print absolute end-2 top-2 grid border border-ink bg-sheet">
-        <MapButton label="Zoom in" onPress={() => zoomBy(1)}>
-          +
-        </MapButton>
-        <MapButton label="Zoom out" onPress={() => zoomBy(-1)}>
-          −
-        </MapButton>
-        <MapButton
-          label="Show the whole again"
-          onPress={() => map?.fitBounds(bounds, fitOptions, byPerson)}
-        >
-          <svg
-            width="14"
-            height="14"
-            stroke="currentColor"
-            strokeWidth="1.4"
-            fill="none"
-            aria-hidden="true"
-          >
-            <path d="M1 5V1h4M9 1h4v4M13 9v4H9M5 13H1V9" />
-          </svg>
-        </MapButton>
-      </div>
-      {metresToPixel === null ? null : (
+      <MapControls
+        onZoomIn={() => map?.zoomTo(map.getZoom() + 1, {}, byPerson)}
+        onZoomOut={() => map?.zoomTo(map.getZoom() - 1, {}, byPerson)}
+        onShowWhole={() => map?.fitBounds(bounds, fitOptions, byPerson)}
+        tilt={
+          surroundings === undefined
+            ? null
+            : {
+                isTilted,
+                onTilt: () => move(isTilted ? { pitch: 0, bearing: 0 } : { pitch: tiltDeg }),
+                onTurn: (byDeg) => move({ bearing: (map?.getBearing() ?? 0) + byDeg }),
+              }
+        }
+        measure={
+          canMeasure
+            ? {
+                isMeasuring: measuring.isMeasuring,
+                onMeasure: () => {
+                  if (measuring.isMeasuring) measuring.end();
+                  else measuring.begin();
+                  map?.getCanvas().focus();
+                },
+              }
+            : null
+        }
+      />
+      {view === null ? null : (
         <div className="pointer-events-none absolute start-0 bottom-0 bg-sheet/80 p-2 pe-0">
-          <NorthAndScale metresToPixel={metresToPixel} />
+          <NorthAndScale
+            metresToPixel={metresPerPixel(view.zoom, view.latitude)}
+            bearingDeg={(Math.round(view.bearingDeg) + 360) % 360}
+            hasScale={!isTilted}
+          />
         </div>
       )}
     </div>
   );
 }
 
-interface MapButtonProps {
-  label: string;
-  onPress: () => void;
-  children: React.ReactNode;
-}
-
-function MapButton({ label, onPress, children }: MapButtonProps) {
+/** The middle of the map, where the keyboard points. */
+function Cross() {
   return (
-    <button
-      type="button"
-      title={label}
-      aria-label={label}
-      onClick={onPress}
-      className="grid size-8 cursor-pointer place-items-center border-b border-hairline text-lead leading-none last:border-b-0 hover:bg-ink/5"
+    <div
+      className="pointer-events-none absolute inset-0 grid place-items-center"
+      aria-hidden="true"
     >
-      {children}
-    </button>
+      <svg width="36" height="36" stroke="var(--color-ink)" strokeWidth="1.5" fill="none">
+        <path d="M18 2v12M18 22v12M2 18h12M22 18h12" />
+      </svg>
+    </div>
   );
 }
 
-/** Carries the page's data, choice and layer into the drawing whenever they change. */
-function useMapContents(map: maplibregl.Map | null, props: CaseMapProps): void {
-  const { site = null, shadows = null, layer = 'after', chosenReceptor = null } = props;
-  const { blocks = none, receptors = none, pins = none, pickedParcels = none } = props;
-  const { figure } = useFormats();
-
-  useEffect(() => {
-    const features =
-      site === null ? [] : [{ type: 'Feature' as const, properties: {}, geometry: site }];
-    fill(map, 'site', collect(features));
-  }, [map, site]);
-  useEffect(() => {
-    fill(map, 'shadows', collect(shadows?.features ?? []));
-  }, [map, shadows]);
-  useEffect(() => {
-    fill(map, 'blocks', blockFeatures(blocks));
-    fill(map, 'block-labels', blockLabelFeatures(blocks, figure.height));
-  }, [map, blocks, figure]);
-  useEffect(() => {
-    fill(map, 'receptors', receptorFeatures(receptors));
-    fill(map, 'not-met', notMetFeatures(receptors));
-  }, [map, receptors]);
-  useEffect(() => {
-    fill(map, 'pins', pinFeatures(pins));
-  }, [map, pins]);
-  useEffect(() => {
-    for (const [id, isVisible] of Object.entries(layerVisibility(layer))) {
-      map?.setLayoutProperty(id, 'visibility', isVisible ? 'visible' : 'none');
-    }
-  }, [map, layer]);
-  useEffect(() => {
-    for (const [id, filter] of Object.entries(choiceFilters(chosenReceptor, pickedParcels))) {
-      map?.setFilter(id, filter);
-    }
-  }, [map, chosenReceptor, pickedParcels]);
-}
-
 /** Brings a chosen receptor that lies outside the view into its middle. */
-function useChosenInView(map: maplibregl.Map | null, props: CaseMapProps): void {
-  const { chosenReceptor = null, receptors = none } = props;
+function useChosenInView(
+  map: maplibregl.Map | null,
+  { chosenReceptor = null, receptors = [] }: CaseMapProps,
+): void {
   const reveal = useEffectEvent((moved: maplibregl.Map, id: string) => {
     const chosen = receptors.find((receptor) => receptor.id === id);
     if (chosen === undefined) return;
@@ -257,39 +228,27 @@ function useChosenInView(map: maplibregl.Map | null, props: CaseMapProps): void 
   }, [map, chosenReceptor]);
 }
 
-/** One empty array for all, so that an absent prop is no change. */
-const none: readonly never[] = [];
-
-function fill(
-  map: maplibregl.Map | null,
-  source: OverlaySource,
-  data: GeoJSON.FeatureCollection,
-): void {
-  void map?.getSource<maplibregl.GeoJSONSource>(source)?.setData(data);
-}
-
-function pickAt(map: maplibregl.Map, point: maplibregl.Point): MapPick {
+function lngLatAt(map: maplibregl.Map, point: maplibregl.Point): [number, number] {
   const { lng, lat } = map.unproject(point);
-  const textOf = (layerId: string, property: string): string | null => {
-    const [feature] = map.queryRenderedFeatures(point, { layers: [layerId] });
-    const value: unknown = feature?.properties[property];
-    return typeof value === 'string' ? value : null;
-  };
-  const number = textOf(pickLayers.parcel, 'number');
-  return {
-    lngLat: [lng, lat],
-    parcel:
-      number === null ? null : { number, address: textOf(pickLayers.parcel, 'address') ?? '' },
-    receptor: textOf(pickLayers.receptor, 'id'),
-    pin: textOf(pickLayers.pin, 'id'),
-  };
+  return [lng, lat];
 }
 
 function cameraOf(map: maplibregl.Map): Camera {
   const { lng, lat } = map.getCenter();
-  return { longitude: lng, latitude: lat, zoom: map.getZoom() };
+  return {
+    longitude: lng,
+    latitude: lat,
+    zoom: map.getZoom(),
+    tiltDeg: map.getPitch(),
+    bearingDeg: map.getBearing(),
+  };
 }
 
-function toJump({ longitude, latitude, zoom }: Camera): maplibregl.JumpToOptions {
-  return { center: [longitude, latitude], zoom };
+function toJump({ longitude, latitude, zoom, tiltDeg: pitch, bearingDeg }: Camera) {
+  return {
+    center: [longitude, latitude],
+    zoom,
+    pitch,
+    bearing: bearingDeg,
+  } satisfies maplibregl.JumpToOptions;
 }

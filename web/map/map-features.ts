@@ -6,9 +6,14 @@ import type { Finding } from '../../shared/study/evidence-schema.ts';
 export interface MapBlock {
   id: string;
   role: 'proposed' | 'existing';
+  /** Metres above the ground. */
+  baseM: number;
   topM: number;
   geometry: Polygonal;
 }
+
+/** What stands around the site, as the tilted view shows it. */
+export type MapVolume = Omit<MapBlock, 'role'>;
 
 /** A receptor as the map draws it; `finding` is null where it has not been judged. */
 export interface MapReceptor {
@@ -41,11 +46,17 @@ export function blockFeatures(blocks: readonly MapBlock[]) {
   return collect(
     blocks
       .toSorted((a, b) => a.topM - b.topM)
-      .map(({ id, role, geometry, topM }) => ({
-        type: 'Feature' as const,
-        properties: { id, role, topM },
-        geometry,
-      })),
+      .map(({ geometry, ...properties }) => ({ type: 'Feature' as const, properties, geometry })),
+  );
+}
+
+export function volumeFeatures(volumes: readonly MapVolume[]) {
+  return collect(
+    volumes.map(({ geometry, ...properties }) => ({
+      type: 'Feature' as const,
+      properties,
+      geometry,
+    })),
   );
 }
 

@@ -7,4 +7,5 @@ export const mapPalette = {
   water: '#E3E6E4',
   netNewGround: '#F6E9E4E6',
   openSpace: '#EFF0E4',
+  proposalVolume: '#FFFFFF',
 } as const;

@@ -8,6 +8,8 @@ import {
   receptorLayers,
   shadowFillLayers,
 } from './case-layers.ts';
+import { measureLayers } from './measure-layers.ts';
+import { volumeLayers } from './volume-layers.ts';
 
 const baseTiles: readonly TileLayer[] = [
   'open-space',
@@ -56,8 +58,10 @@ export function buildMapStyle(tilesUrl: string): StyleSpecification {
       ...lotLayers,
       ...proposalLayers,
       ...receptorLayers,
+      ...volumeLayers,
       ...nameLayers,
       ...markLayers,
+      ...measureLayers,
     ],
   };
 }

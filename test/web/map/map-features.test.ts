@@ -17,6 +17,7 @@ const square = (west: number, south: number, size: number): Polygonal => ({
 const block = (id: string, topM: number, role: MapBlock['role'] = 'proposed'): MapBlock => ({
   id,
   role,
+  baseM: 0,
   topM,
   geometry: square(-91.3, 46.75, 0.001),
 });

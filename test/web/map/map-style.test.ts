@@ -8,6 +8,7 @@ import {
   shadowLayers,
 } from '../../../web/map/case-layers.ts';
 import { buildMapStyle } from '../../../web/map/map-style.ts';
+import { volumeVisibility } from '../../../web/map/volume-layers.ts';
 
 const style = buildMapStyle('https://town.example/api/tiles/{layer}/{z}/{x}/{y}.mvt');
 const layerIds = style.layers.map((layer) => layer.id);
@@ -47,7 +48,10 @@ describe('the map’s style', () => {
   });
 
   it('switches and filters only layers that exist', () => {
-    const switched = shadowLayers.flatMap((layer) => Object.keys(layerVisibility(layer)));
+    const switched = [
+      ...shadowLayers.flatMap((layer) => Object.keys(layerVisibility(layer))),
+      ...Object.keys(volumeVisibility(true, false)),
+    ];
     const filtered = Object.keys(choiceFilters('a', ['b']));
     for (const id of [...switched, ...filtered, ...Object.values(pickLayers)]) {
       expect(layerIds).toContain(id);
@@ -72,5 +76,22 @@ describe('layerVisibility', () => {
   it('shows the difference alone', () => {
     const fills = shown('net-new').filter((id) => id.startsWith('shadow'));
     expect(fills).toEqual(['shadow-net-new', 'shadow-net-new-outline']);
+  });
+});
+
+describe('volumeVisibility', () => {
+  const standing = (isTilted: boolean, isBefore: boolean) =>
+    Object.entries(volumeVisibility(isTilted, isBefore)).flatMap(([id, isShown]) =>
+      isShown ? [id] : [],
+    );
+
+  it('shows volumes in the tilted view alone', () => {
+    expect(standing(false, false)).toEqual([]);
+    expect(standing(false, true)).toEqual([]);
+  });
+
+  it('shows the proposal after, and what it replaces before', () => {
+    expect(standing(true, false)).toEqual(['surroundings-volume', 'proposal-volume']);
+    expect(standing(true, true)).toEqual(['surroundings-volume', 'existing-volume']);
   });
 });

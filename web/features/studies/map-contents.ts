@@ -1,16 +1,27 @@
 import type { FindingRow } from '../../../shared/contracts/studies.ts';
 import { isPolygonal } from '../../../shared/geometry/geojson-schema.ts';
-import type { MapBlock, MapReceptor } from '../../map/map-features.ts';
+import type { MapBlock, MapReceptor, MapVolume } from '../../map/map-features.ts';
 import type { DrawnEvidence } from './api/get-study-evidence.ts';
 import { worstFinding } from './sun-losers.ts';
 
-/** The site's blocks of a study as the map draws them; what stands around comes with the base map. */
+/** The site's blocks of a study as the map draws them. */
 export function mapBlocksOf(evidence: DrawnEvidence): MapBlock[] {
-  return evidence.blocks.features.flatMap(({ properties, geometry }): MapBlock[] =>
-    properties.role === 'proposed' || properties.role === 'existing'
-      ? [{ id: properties.id, role: properties.role, topM: properties.top, geometry }]
-      : [],
-  );
+  return evidence.blocks.features.flatMap(({ properties, geometry }): MapBlock[] => {
+    const { id, role, base: baseM, top: topM } = properties;
+    return role === 'proposed' || role === 'existing' ? [{ id, role, baseM, topM, geometry }] : [];
+  });
+}
+
+/** What the study takes to stand around the site, for the tilted view. */
+export function mapSurroundingsOf(evidence: DrawnEvidence): MapVolume[] {
+  return evidence.blocks.features
+    .filter(({ properties }) => properties.role === 'context')
+    .map(({ properties: { id, base: baseM, top: topM }, geometry }) => ({
+      id,
+      baseM,
+      topM,
+      geometry,
+    }));
 }
 
 /** Every receptor of a study with the worst of its findings. */

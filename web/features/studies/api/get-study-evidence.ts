@@ -11,7 +11,12 @@ const drawnEvidenceSchema = z.object({
   blocks: z.object({
     features: z.array(
       z.object({
-        properties: z.object({ id: z.string(), role: z.string(), top: z.number() }),
+        properties: z.object({
+          id: z.string(),
+          role: z.string(),
+          base: z.number(),
+          top: z.number(),
+        }),
         geometry: polygonalSchema,
       }),
     ),

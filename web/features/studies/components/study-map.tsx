@@ -1,4 +1,4 @@
-import { useMemo } from 'react';
+import { useMemo, useState } from 'react';
 import type {
   InstantShadows,
   StudyDetail,
@@ -9,11 +9,13 @@ import type { LngLat, Polygonal } from '../../../../shared/geometry/geojson-sche
 import { usePlace } from '../../../lib/place-context.ts';
 import { useCameraInUrl } from '../../../map/camera-in-url.ts';
 import type { ShadowLayer } from '../../../map/case-layers.ts';
+import type { MapPick } from '../../../map/case-map-props.ts';
 import { CaseMap } from '../../../map/case-map.tsx';
 import { boundsAround, type Bounds, type MapPin } from '../../../map/map-features.ts';
 import { MapTitleBlock } from '../../../map/map-title-block.tsx';
 import type { DrawnEvidence } from '../api/get-study-evidence.ts';
-import { mapBlocksOf, mapReceptorsOf } from '../map-contents.ts';
+import { mapBlocksOf, mapReceptorsOf, mapSurroundingsOf } from '../map-contents.ts';
+import { PlaceFacts } from './place-facts.tsx';
 import { StudyPlan } from './study-plan.tsx';
 
 export interface StudyMapProps {
@@ -36,7 +38,9 @@ export function StudyMap(props: StudyMapProps) {
   const { study, site, evidence, rows, shadows, layer, chosen, onChoose, pins } = props;
   const { municipality } = usePlace();
   const { camera, onCameraChange } = useCameraInUrl();
+  const [picked, setPicked] = useState<MapPick | null>(null);
   const blocks = useMemo(() => mapBlocksOf(evidence), [evidence]);
+  const surroundings = useMemo(() => mapSurroundingsOf(evidence), [evidence]);
   const receptors = useMemo(() => mapReceptorsOf(evidence, rows), [evidence, rows]);
   const bounds = useMemo<Bounds>(() => {
     const notMet = receptors.filter((one) => one.finding === 'not-met');
@@ -59,14 +63,26 @@ export function StudyMap(props: StudyMapProps) {
       onCameraChange={onCameraChange}
       site={site}
       blocks={blocks}
+      surroundings={surroundings}
+      canMeasure
       shadows={shadows}
       layer={layer}
       {...(pins === undefined ? {} : { pins })}
       receptors={receptors}
       chosenReceptor={chosen}
-      onPick={({ receptor, lngLat }) => {
-        if (receptor !== null) onChoose(receptor, lngLat);
+      onPick={(pick) => {
+        setPicked(pick);
+        if (pick.receptor !== null) onChoose(pick.receptor, pick.lngLat);
       }}
+      alternative={
+        <PlaceFacts
+          pick={picked}
+          receptors={receptors}
+          chosen={chosen}
+          onChoose={onChoose}
+          onClose={() => setPicked(null)}
+        />
+      }
       titleBlock={<MapTitleBlock block={titleBlock} />}
       fallback={
         <StudyPlan {...{ site, evidence, rows, shadows, layer, chosen, bounds, titleBlock }} />

@@ -123,7 +123,7 @@ export function StudySheet({
       {shown.error === null ? null : <ProblemNotice error={shown.error} onRetry={shown.onRetry} />}
       <MapKey />
       <p className="text-small">
-        Point at a receptor to read its account, or choose it in{' '}
+        All of it stands in{' '}
         <a href={`#${tableId}`} className="link">
           the table that says the same
         </a>
