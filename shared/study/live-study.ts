@@ -88,7 +88,8 @@ export function openLiveStudy(input: StudyInput, clipper: Clipper): LiveStudy {
         });
         const leastM2 = leastLostShare * receptor.openAreaM2;
         const losesSun = rows.some((row) => row.sunBefore - row.sunAfter > leastM2);
-        return losesSun ? [{ id: receptor.id, openArea: receptor.openAreaM2, instants: rows }] : [];
+        const openArea = receptor.front === null ? receptor.openAreaM2 : null;
+        return losesSun ? [{ id: receptor.id, openArea, instants: rows }] : [];
       });
     },
   };
