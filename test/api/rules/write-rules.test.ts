@@ -3,6 +3,7 @@ import { RuleVersion } from '../../../api/modules/rules/rule-version.entity.ts';
 import { problemSchema } from '../../../shared/contracts/problem.ts';
 import { ruleVersionSchema } from '../../../shared/contracts/rules.ts';
 import type { Rule } from '../../../shared/rules/rule-schema.ts';
+import { brinewell } from '../../support/brinewell.ts';
 import { buildSmallCity, smallCityRule } from '../../support/small-city.ts';
 import { bodyOf, startTestApi, type Agent, type TestApi } from '../../support/test-api.ts';
 
@@ -63,20 +64,7 @@ describe('the very first version', () => {
   beforeAll(async () => {
     emptyApi = await startTestApi();
     first = await emptyApi.signIn('administrator');
-    await first
-      .put('/api/municipality')
-      .send({
-        name: 'Town of Brinewell',
-        shortName: 'Brinewell',
-        timeZone: 'America/Chicago',
-        locale: 'en-US',
-        longitude: -92.1,
-        latitude: 45.2,
-        elevationM: 210,
-        extent: [-92.2, 45.1, -92, 45.3],
-        studyYear: 2026,
-      })
-      .expect(201);
+    await first.put('/api/municipality').send(brinewell).expect(201);
   });
   afterAll(() => emptyApi.close());
 

@@ -1,6 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { municipalitySchema } from '../../../shared/contracts/base-data.ts';
 import { problemSchema } from '../../../shared/contracts/problem.ts';
+import { brinewell } from '../../support/brinewell.ts';
 import { bodyOf, startTestApi, type TestApi } from '../../support/test-api.ts';
 
 let api: TestApi;
@@ -10,17 +11,7 @@ beforeAll(async () => {
 });
 afterAll(() => api.close());
 
-const place = {
-  name: 'Town of Brinewell',
-  shortName: 'Brinewell',
-  timeZone: 'America/Chicago',
-  locale: 'en-US',
-  longitude: -92.1,
-  latitude: 45.2,
-  elevationM: 210,
-  extent: [-92.2, 45.1, -92, 45.3],
-  studyYear: 2027,
-};
+const place = { ...brinewell, studyYear: 2027 };
 
 describe('the place that a server serves', () => {
   it('is missing, in a sentence, until the administrator sets it up', async () => {
