@@ -1,4 +1,4 @@
-import type { Geometry } from 'geojson';
+import type { Geometry, Position } from 'geojson';
 import { z } from 'zod';
 
 /** What is used of GEOS, the geometry library under PostGIS, compiled to WebAssembly. */
@@ -47,4 +47,18 @@ export async function loadGeos(
     read: (geometry: Geometry) => geojsonToGeosGeom(geometry, geos),
     write: (pointer: number) => geosGeomToGeojson(pointer, geos),
   });
+}
+
+/** The polygons among what is left: where two borders fell together, a line may stand beside them. */
+export function polygonsWithin(geometry: Geometry): Position[][][] {
+  switch (geometry.type) {
+    case 'Polygon':
+      return [geometry.coordinates];
+    case 'MultiPolygon':
+      return geometry.coordinates;
+    case 'GeometryCollection':
+      return geometry.geometries.flatMap(polygonsWithin);
+    default:
+      return [];
+  }
 }

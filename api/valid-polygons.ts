@@ -1,6 +1,6 @@
-import type { Geometry, MultiPolygon, Position } from 'geojson';
+import type { MultiPolygon } from 'geojson';
 import { degreesPerUnit } from '../shared/study/draw-instant.ts';
-import { loadGeos, type Geos } from './geos.ts';
+import { loadGeos, polygonsWithin, type Geos } from './geos.ts';
 
 let starting: Promise<Geos> | undefined;
 
@@ -23,22 +23,8 @@ export async function makePolygonsValid(polygons: MultiPolygon): Promise<MultiPo
     if (onGrid === 0) throw new Error('GEOS could not make the shadows valid.');
     const result = geos.write(onGrid);
     geos.GEOSGeom_destroy(onGrid);
-    return { type: 'MultiPolygon', coordinates: polygonsOf(result) };
+    return { type: 'MultiPolygon', coordinates: polygonsWithin(result) };
   } finally {
     geos.GEOSGeom_destroy(drawn);
-  }
-}
-
-/** The polygons among what is left: where two borders fell together, a line may stand beside them. */
-function polygonsOf(geometry: Geometry): Position[][][] {
-  switch (geometry.type) {
-    case 'Polygon':
-      return [geometry.coordinates];
-    case 'MultiPolygon':
-      return geometry.coordinates;
-    case 'GeometryCollection':
-      return geometry.geometries.flatMap(polygonsOf);
-    default:
-      return [];
   }
 }

@@ -1,5 +1,5 @@
-import type { Geometry, MultiPolygon, Position } from 'geojson';
-import { loadGeos } from '../../api/geos.ts';
+import type { MultiPolygon, Position } from 'geojson';
+import { loadGeos, polygonsWithin } from '../../api/geos.ts';
 import type { Ring } from '../../shared/geometry/ring.ts';
 
 /** GEOS as a second opinion on areas and on valid polygons. */
@@ -20,7 +20,7 @@ export async function loadSecondOpinion(): Promise<SecondOpinion> {
     if (pointer === 0) throw new Error(`GEOS: ${complaints.splice(0).join('; ')}`);
     const geometry = geos.write(pointer);
     geos.GEOSGeom_destroy(pointer);
-    return { type: 'MultiPolygon', coordinates: polygonsOf(geometry) };
+    return { type: 'MultiPolygon', coordinates: polygonsWithin(geometry) };
   };
   return {
     isValid: (geometry) => {
@@ -65,11 +65,4 @@ export function multiPolygonOf(...polygons: readonly (readonly Ring[])[]): Multi
       rings.map((ring) => [...ring, ...ring.slice(0, 1)].map(([x, y]): Position => [x, y])),
     ),
   };
-}
-
-function polygonsOf(geometry: Geometry): Position[][][] {
-  if (geometry.type === 'Polygon') return [geometry.coordinates];
-  if (geometry.type === 'MultiPolygon') return geometry.coordinates;
-  if (geometry.type === 'GeometryCollection') return geometry.geometries.flatMap(polygonsOf);
-  return [];
 }
