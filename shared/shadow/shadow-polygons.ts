@@ -1,4 +1,4 @@
-import { boxesOverlap, joinBoxes, type Box, type Ring } from '../geometry/ring.ts';
+import { boxesOverlap, boxOfRings, joinBoxes, type Box, type Ring } from '../geometry/ring.ts';
 import { metreGrid, combineRings, makePaths, type FramePolygon } from './clipper-paths.ts';
 import type { Clipper } from './clipper.ts';
 import type { LitArea } from './receptor-light.ts';
@@ -62,11 +62,21 @@ export function overlapAreasM2(
   polygons: PlanePolygons,
   areas: readonly LitArea[],
 ): number[] {
-  const subjects = makePaths(clipper, coordinatesOf(polygons.flat()));
+  // What lies apart from all areas need not be handed over.
+  const reach = areas.map(({ box }) => box).reduce<Box | null>(joinOrTake, null);
+  const near = polygons.filter(
+    ([shell = []]) => reach !== null && boxesOverlap(boxOfRings([shell]), reach),
+  );
+  const subjects = makePaths(clipper, coordinatesOf(near.flat()));
   const overlaps = areas.map(({ rings, siteRings }) => {
     const outside = siteRings.map((ring) => ring.toReversed());
     const clips = makePaths(clipper, coordinatesOf([...rings, ...outside]));
-    const overlap = clipper.IntersectD(subjects, clips, clipper.FillRule.Positive, metreGrid.decimals);
+    const overlap = clipper.IntersectD(
+      subjects,
+      clips,
+      clipper.FillRule.Positive,
+      metreGrid.decimals,
+    );
     const areaM2 = clipper.AreaPathsD(overlap);
     [clips, overlap].forEach((paths) => paths.delete());
     return areaM2;
@@ -120,10 +130,11 @@ function boxOfShell([shell = []]: FramePolygon): Box {
 }
 
 function boxOfShadows(shadows: readonly BlockShadow[]): Box | null {
-  return shadows.reduce<Box | null>(
-    (joined, { box }) => (joined === null ? box : joinBoxes(joined, box)),
-    null,
-  );
+  return shadows.map(({ box }) => box).reduce<Box | null>(joinOrTake, null);
+}
+
+function joinOrTake(joined: Box | null, box: Box): Box {
+  return joined === null ? box : joinBoxes(joined, box);
 }
 
 /** Turns polygons back onto the local plane; the same polygon gives the same object. */

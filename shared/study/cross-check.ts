@@ -1,9 +1,13 @@
 import type { Clipper } from '../shadow/clipper.ts';
-import { overlapAreasM2, type ShadowPolygons } from '../shadow/shadow-polygons.ts';
+import {
+  overlapAreasM2,
+  type PlanePolygons,
+  type ShadowPolygons,
+} from '../shadow/shadow-polygons.ts';
 import type { StudyResults } from './evidence-schema.ts';
 import type { InstantLight } from './instant-light.ts';
 import { roundMeasure } from './rounding.ts';
-import type { Scene } from './scene.ts';
+import type { Scene, SceneReceptor } from './scene.ts';
 
 export type CrossCheck = NonNullable<StudyResults['check']>;
 
@@ -11,8 +15,9 @@ export type CrossCheck = NonNullable<StudyResults['check']>;
 const leastNetNewM2 = 0.01;
 
 /**
- * Measures the net new shadow on every ground receptor a second time, from the drawn polygons, and
- * keeps the largest difference from the sweep's figure in `check`.
+ * Measures a second time, from the drawn polygons, the net new shadow on every ground receptor, and
+ * on the one that it takes most from the shadow before and after as well. The largest difference
+ * from the sweep's figures stays in `check`.
  */
 export function crossCheckReceptors(
   clipper: Clipper,
@@ -22,22 +27,36 @@ export function crossCheckReceptors(
   polygons: ShadowPolygons,
   check: CrossCheck,
 ): void {
+  const netNewM2 = (receptor: SceneReceptor) => instant.lightOn(receptor, 0).netNewM2;
   const shaded = scene.receptors.filter(
     (receptor) =>
-      receptor.front === null &&
-      receptor.planeM === 0 &&
-      instant.lightOn(receptor, 0).netNewM2 >= leastNetNewM2,
+      receptor.front === null && receptor.planeM === 0 && netNewM2(receptor) >= leastNetNewM2,
   );
-  const drawnM2 = overlapAreasM2(
-    clipper,
-    polygons.netNew,
-    shaded.map(({ area }) => area),
+  const compare = (
+    drawn: PlanePolygons,
+    receptors: readonly SceneReceptor[],
+    expectedM2: (receptor: SceneReceptor) => number,
+  ) => {
+    const areas = receptors.map(({ area }) => area);
+    overlapAreasM2(clipper, drawn, areas).forEach((drawnM2, index) => {
+      const receptor = receptors[index];
+      if (receptor === undefined) return;
+      const differenceM2 = roundMeasure(Math.abs(drawnM2 - expectedM2(receptor)));
+      if (differenceM2 > check.largestDifferenceM2) {
+        Object.assign(check, { largestDifferenceM2: differenceM2, at, receptor: receptor.id });
+      }
+    });
+  };
+  const most = shaded.toSorted((a, b) => netNewM2(b) - netNewM2(a)).slice(0, 1);
+  compare(polygons.netNew, shaded, netNewM2);
+  compare(
+    polygons.before,
+    most,
+    (receptor) => receptor.wholeAreaM2 - instant.lightOn(receptor, 0).sunBeforeM2,
   );
-  shaded.forEach((receptor, index) => {
-    const { netNewM2 } = instant.lightOn(receptor, 0);
-    const differenceM2 = roundMeasure(Math.abs((drawnM2[index] ?? NaN) - netNewM2));
-    if (differenceM2 > check.largestDifferenceM2) {
-      Object.assign(check, { largestDifferenceM2: differenceM2, at, receptor: receptor.id });
-    }
-  });
+  compare(
+    polygons.after,
+    most,
+    (receptor) => receptor.wholeAreaM2 - instant.lightOn(receptor, 0).sunAfterM2,
+  );
 }
