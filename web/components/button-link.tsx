@@ -15,7 +15,7 @@ export function ButtonLink({ kind = 'secondary', className = '', ...props }: But
   return (
     <Link
       {...props}
-      className={`inline-flex items-center justify-center border border-ink px-4 py-2 font-strong leading-snug ${kinds[kind]} ${className}`}
+      className={`no-print inline-flex items-center justify-center border border-ink px-4 py-2 font-strong leading-snug ${kinds[kind]} ${className}`}
     />
   );
 }

@@ -9,12 +9,14 @@ export interface ButtonProps extends Omit<AriaButtonProps, 'className' | 'style'
   className?: string;
 }
 
+// What is done on a screen is not printed; a plain button reads as text, and stays.
 const kinds = {
   primary:
-    'border border-ink bg-ink px-4 py-2 font-strong text-paper data-hovered:bg-ink-soft data-pressed:bg-ink-soft',
-  secondary: 'border border-ink px-4 py-2 font-strong data-hovered:bg-ink/5 data-pressed:bg-ink/10',
+    'no-print border border-ink bg-ink px-4 py-2 font-strong text-paper data-hovered:bg-ink-soft data-pressed:bg-ink-soft',
+  secondary:
+    'no-print border border-ink px-4 py-2 font-strong data-hovered:bg-ink/5 data-pressed:bg-ink/10',
   danger:
-    'border border-madder px-4 py-2 font-strong text-madder data-hovered:bg-madder/5 data-pressed:bg-madder/10',
+    'no-print border border-madder px-4 py-2 font-strong text-madder data-hovered:bg-madder/5 data-pressed:bg-madder/10',
   plain: 'link py-0.5',
 } as const;
 

@@ -33,7 +33,7 @@ export function ChoiceRow<Key extends string>({
         <ToggleButton
           key={option.id}
           id={option.id}
-          className="cursor-pointer border-b-2 border-transparent py-1 data-hovered:border-hairline data-selected:border-marigold data-selected:font-strong"
+          className="cursor-pointer border-b-2 border-transparent py-1 print:not-data-selected:hidden data-hovered:border-hairline data-selected:border-marigold data-selected:font-strong"
         >
           {option.label}
         </ToggleButton>

@@ -21,7 +21,7 @@ export function FileDrop({ label, acceptedFileTypes, onFile, children }: FileDro
         const dropped = event.items.find((item) => item.kind === 'file');
         if (dropped?.kind === 'file') void dropped.getFile().then(onFile);
       }}
-      className="grid justify-items-center gap-2 border border-dashed border-ink px-4 py-7 text-center data-drop-target:bg-marigold-wash data-focus-visible:outline-2"
+      className="no-print grid justify-items-center gap-2 border border-dashed border-ink px-4 py-7 text-center data-drop-target:bg-marigold-wash data-focus-visible:outline-2"
     >
       <Text slot="label">Drop {label} here, or</Text>
       <FileTrigger

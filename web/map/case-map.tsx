@@ -1,5 +1,6 @@
 import { Component, lazy, Suspense, useState, type ReactNode } from 'react';
 import { Loading } from '../components/loading.tsx';
+import { usePrinting } from '../lib/use-printing.ts';
 import type { CaseMapProps } from './case-map-props.ts';
 
 const MapCanvas = lazy(() => import('./map-canvas.tsx'));
@@ -9,6 +10,8 @@ export function CaseMap(props: CaseMapProps) {
   const { label, titleBlock, fallback, alternative, className = 'h-[60vh] min-h-80' } = props;
   const [canDraw] = useState(hasWebGl);
   const [isTileMissing, setIsTileMissing] = useState(false);
+  // A printer gets nothing of a WebGL canvas: paper shows the plan drawing.
+  const isPrinting = usePrinting();
   const notice = (
     <div className="grid gap-3 border border-hairline bg-sheet p-4">
       <p role="status">
@@ -30,8 +33,9 @@ export function CaseMap(props: CaseMapProps) {
   }
   return (
     <MapBoundary notice={notice}>
-      <section aria-label={label}>
-        <div className={`relative border border-hairline bg-sheet ${className}`}>
+      <section aria-label={label} className={fallback === undefined ? 'no-print' : ''}>
+        {isPrinting ? <div className="plan-on-paper">{fallback}</div> : null}
+        <div className={`no-print relative border border-hairline bg-sheet ${className}`}>
           <Suspense
             fallback={
               <div className="p-3">
@@ -47,13 +51,17 @@ export function CaseMap(props: CaseMapProps) {
             </div>
           )}
         </div>
-        {titleBlock === undefined ? null : <div className="mt-2 sm:hidden">{titleBlock}</div>}
+        {titleBlock === undefined ? null : (
+          <div className="no-print mt-2 sm:hidden">{titleBlock}</div>
+        )}
         {isTileMissing ? (
           <p role="status" className="mt-1 text-small">
             A part of the base map could not be loaded. Move the map or reload the page.
           </p>
         ) : null}
-        {alternative === undefined ? null : <div className="mt-1 text-small">{alternative}</div>}
+        {alternative === undefined ? null : (
+          <div className="no-print mt-1 text-small">{alternative}</div>
+        )}
       </section>
     </MapBoundary>
   );
