@@ -1,6 +1,6 @@
 import type { z } from 'zod';
 import { createLocalPlane } from '../../shared/geometry/local-plane.ts';
-import type { Ring } from '../../shared/geometry/ring.ts';
+import type { PlanePoint, Ring } from '../../shared/geometry/ring.ts';
 import type { studyInputSchema } from '../../shared/study/evidence-schema.ts';
 
 export type StudyInputDraft = z.input<typeof studyInputSchema>;
@@ -44,6 +44,24 @@ export function receptorFeature(
   return {
     properties: { id, class: 'yard', label: `${id} Netloft Lane`, ...more },
     geometry: toPolygon(ring),
+  };
+}
+
+/** A window on its façade: one point, or a line, in metres around the place. */
+export function windowFeature(
+  id: string,
+  points: readonly PlanePoint[],
+  facing: number | undefined,
+): Receptor {
+  const lngLats = points.map((point) => plane.toLngLat(point));
+  const [first] = lngLats;
+  if (first === undefined) throw new Error('A window needs a point.');
+  return {
+    properties: { id, class: 'window', label: `${id} Netloft Lane`, facing },
+    geometry:
+      lngLats.length === 1
+        ? { type: 'Point', coordinates: first }
+        : { type: 'LineString', coordinates: lngLats },
   };
 }
 

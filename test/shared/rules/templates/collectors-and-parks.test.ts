@@ -93,7 +93,7 @@ describe('a park’s budget of area times hours', () => {
     expect(Math.abs((result?.loss ?? NaN) - 0.018)).toBeLessThan(0.0005);
   });
 
-  it('adds up the whole year’s hours', async () => {
+  it('adds up the whole year’s hours', () => {
     // 3,720.8 h in San Francisco by the NREL algorithm, of the sun's upper edge (worked with pvlib);
     // 3,721.4 in use there, from memory. This engine's sun is the disc's centre, which rises some
     // 1.5 min later and sets as much earlier: about 18 h a year fewer.
