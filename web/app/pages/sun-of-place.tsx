@@ -22,7 +22,13 @@ export function SunOfPlace() {
   const clock = (atMs: number | null) =>
     atMs === null ? '—' : formats.clock(formatInstant(roundToMinute(atMs), timeZone));
   const columns: TableColumn<Row>[] = [
-    { id: 'day', header: 'Day', cell: ({ date }) => formats.dayOfYear(date), isRowHeader: true },
+    {
+      id: 'day',
+      header: 'Day',
+      cell: ({ date }) => formats.dayOfYear(date),
+      isRowHeader: true,
+      className: 'whitespace-nowrap',
+    },
     { id: 'rise', header: 'Sunrise', cell: ({ sunriseMs }) => clock(sunriseMs), align: 'end' },
     {
       id: 'noon',
