@@ -18,6 +18,10 @@ const defaultTitles = {
   MASSING_MISSING: 'Upload a massing first.',
   MUNICIPALITY_SET_UP: 'The municipality is set up already.',
   RULE_MISSING: 'No rule is in force today. Put one in force first.',
+  RULE_IS_KEPT:
+    'This version of the rule is or was in force and stays as it is. Make a new version from it.',
+  RULE_CHANGED_MEANWHILE:
+    'Somebody has changed this draft meanwhile. Load it again and look before you go on.',
   STUDY_RUNNING: 'A study of this revision is already under way.',
   STUDY_MISSING: 'Run a study first.',
   STUDY_NOT_FINISHED: 'The study is not finished yet.',

@@ -47,6 +47,6 @@ export async function seedCity(em: EntityManager, city: SampleCity, now: Date): 
     for (const line of city.streetLines) tx.create(StreetLine, line);
     for (const water of city.waters) tx.create(Water, water);
     const inForceFrom = `${studyYear}-01-01`;
-    await createRuleVersion(tx, { rule: demoRule, inForceFrom }, inForceFrom);
+    await createRuleVersion(tx, null, { rule: demoRule, inForceFrom }, inForceFrom);
   });
 }

@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { multiPolygonSchema } from '../geometry/geojson-schema.ts';
 import { sunLedgerSchema } from '../receptors/sun-ledger-schema.ts';
+import { receptorClassSchema } from '../rules/rule-schema.ts';
 import { findingSchema, studyFindingsSchema } from '../study/evidence-schema.ts';
 import { studyStatusSchema } from './cases.ts';
 import { listQuerySchema, pageSchema } from './paging.ts';
@@ -106,17 +107,52 @@ export const findingRowSchema = z.object({
   margin: z.number(),
   loss: z.number().nullable(),
   band: z.string().nullable(),
+  /** Of a season: the days on which the limit is not met; null for single days and sums. */
+  daysNotMet: z.int().nullable().optional(),
+  /** Metres between the sample points; null where none were taken. */
+  spacingM: z.number().nullable().optional(),
   sentence: z.string(),
 });
 export type FindingRow = z.infer<typeof findingRowSchema>;
 
+/** A receptor's class, or `ring` for the ground around the site. */
+export const judgedClassSchema = z.enum([...receptorClassSchema.options, 'ring']);
+export type JudgedClass = z.infer<typeof judgedClassSchema>;
+
 export const listFindingsQuerySchema = listQuerySchema.extend({
   finding: findingSchema.optional(),
   clause: z.string().max(100).optional(),
+  class: judgedClassSchema.optional(),
 });
 export type ListFindingsQuery = z.input<typeof listFindingsQuerySchema>;
 export const findingPageSchema = pageSchema(findingRowSchema);
 export type FindingPage = z.infer<typeof findingPageSchema>;
+
+/** What a study says of each clause: its finding, and how many receptors have which. */
+export const clauseSummarySchema = z.object({
+  clause: z.string(),
+  title: z.string(),
+  finding: z.enum(['met', 'not-met', 'no-receptor']),
+  judged: z.int(),
+  notMet: z.int(),
+  met: z.int(),
+  disregarded: z.int(),
+  notAffected: z.int(),
+  /** Within one step or one grid spacing of the limit. */
+  close: z.int(),
+  /** The worst margin among the receptors that the proposal affects; null where it affects none, or their margins have several units. */
+  worst: z
+    .object({ receptor: z.string(), label: z.string(), margin: z.number(), unit: z.string() })
+    .nullable(),
+});
+export type ClauseSummary = z.infer<typeof clauseSummarySchema>;
+
+export const findingsSummarySchema = z.object({
+  clauses: z.array(clauseSummarySchema),
+  /** The classes that any clause judges here. */
+  classes: z.array(judgedClassSchema),
+});
+export type FindingsSummary = z.infer<typeof findingsSummarySchema>;
 
 /** One receptor of a study: its findings and its sun ledger on the key dates. */
 export const receptorDetailSchema = z.object({

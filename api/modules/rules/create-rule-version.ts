@@ -1,26 +1,24 @@
 import { UniqueConstraintViolationException } from '@mikro-orm/core';
 import type { EntityManager } from '@mikro-orm/postgresql';
 import type { CreateRuleVersionInput } from '../../../shared/contracts/rules.ts';
-import { checkRule } from '../../../shared/rules/check-rule.ts';
-import { AppError } from '../../errors.ts';
-import { getMunicipality } from '../settings/get-municipality.ts';
-import { placeOf } from '../studies/study-place.ts';
+import type { Actor } from '../../policy.ts';
+import { Person } from '../people/person.entity.ts';
+import { checkRuleHere, refuse } from './check-rule-here.ts';
 import { RuleVersion } from './rule-version.entity.ts';
 
 /**
  * Writes the next version of the municipality's one rule; earlier versions stay as they are. One that
  * cannot be judged there in the year of its studies is refused.
+ *
+ * @param actor null where the server itself sets up the rule
  */
 export async function createRuleVersion(
   em: EntityManager,
+  actor: Actor | null,
   { rule, inForceFrom }: CreateRuleVersionInput,
   today: string,
 ): Promise<RuleVersion> {
-  const municipality = await getMunicipality(em);
-  const issues = checkRule(rule, placeOf(municipality), municipality.studyYear);
-  if (issues.length > 0) {
-    refuse(...issues.map(({ path, message }) => ({ path: `rule.${path}`, message })));
-  }
+  await checkRuleHere(em, rule);
   try {
     return await em.transactional(async (tx) => {
       const latest = await tx.findOne(
@@ -44,12 +42,16 @@ export async function createRuleVersion(
           message: 'A version comes into force today at the earliest.',
         });
       }
+      const by = actor === null ? null : await tx.findOneOrFail(Person, actor.id);
+      const now = new Date();
       return tx.create(RuleVersion, {
         ruleId: rule.id,
         version: nextVersion,
         inForceFrom,
         rule,
-        createdAt: new Date(),
+        createdAt: now,
+        createdBy: by,
+        ...(inForceFrom === null ? {} : { enactedAt: now, enactedBy: by }),
       });
     });
   } catch (error) {
@@ -59,8 +61,4 @@ export async function createRuleVersion(
       message: 'Somebody has written this version meanwhile.',
     });
   }
-}
-
-function refuse(...errors: { path: string; message: string }[]): never {
-  throw new AppError('INPUT_INVALID', { errors });
 }

@@ -1,18 +1,26 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
 import { z } from 'zod';
+import { tryRuleInputSchema } from '../../../shared/contracts/rule-trials.ts';
 import {
+  changeRuleDraftInputSchema,
   createRuleVersionInputSchema,
+  discardRuleDraftQuerySchema,
+  enactRuleVersionInputSchema,
   ruleVersionListSchema,
   ruleVersionSchema,
 } from '../../../shared/contracts/rules.ts';
-import { defineEndpoint } from '../../endpoint.ts';
+import { defineEmptyEndpoint, defineEndpoint, defineRawEndpoint } from '../../endpoint.ts';
 import { AppError } from '../../errors.ts';
 import { mayReadRuleDrafts } from '../../policy.ts';
-import { civilDateIn, getMunicipality } from '../settings/get-municipality.ts';
+import { changeRuleDraft, discardRuleDraft, enactRuleVersion } from './change-rule-draft.ts';
 import { createRuleVersion } from './create-rule-version.ts';
-import { findRuleInForce } from './find-rule-in-force.ts';
+import { readRuleCalendar } from './find-rule-in-force.ts';
 import { RuleVersion } from './rule-version.entity.ts';
-import { presentRuleVersion } from './rule-version.presenter.ts';
+import { presentRuleVersion, stateOfVersion } from './rule-version.presenter.ts';
+import { streamRuleTrial } from './stream-rule-trial.ts';
+
+const ruleParams = z.object({ id: z.uuid() });
+const who = ['createdBy', 'changedBy', 'enactedBy'] as const;
 
 export const rulesEndpoints = [
   defineEndpoint({
@@ -22,10 +30,14 @@ export const rulesEndpoints = [
     access: 'anybody',
     response: ruleVersionListSchema,
     handler: async ({ em, actor }) => {
-      const { today, inForce } = await readCalendar(em);
-      const versions = await em.find(RuleVersion, {}, { orderBy: { version: 'desc' } });
-      const rows = versions.map((one) => presentRuleVersion(one, inForce, today));
-      return { rows: rows.filter(({ state }) => state !== 'draft' || mayReadRuleDrafts(actor)) };
+      const calendar = await readRuleCalendar(em);
+      const isStaff = mayReadRuleDrafts(actor);
+      const versions = await em.findAll(RuleVersion, {
+        orderBy: { version: 'desc' },
+        populate: [...who],
+      });
+      const seen = versions.filter((one) => isStaff || !isToCome(stateOfVersion(one, calendar)));
+      return { rows: seen.map((one) => presentRuleVersion(one, calendar, { withNames: isStaff })) };
     },
   }),
   defineEndpoint({
@@ -33,16 +45,16 @@ export const rulesEndpoints = [
     path: '/api/rules/:id',
     summary: 'One version of the rule.',
     access: 'anybody',
-    params: z.object({ id: z.uuid() }),
+    params: ruleParams,
     response: ruleVersionSchema,
     handler: async ({ em, actor, params }) => {
-      const { today, inForce } = await readCalendar(em);
-      const version = await em.findOne(RuleVersion, params.id);
-      const row = version === null ? null : presentRuleVersion(version, inForce, today);
-      if (row === null || (row.state === 'draft' && !mayReadRuleDrafts(actor))) {
+      const calendar = await readRuleCalendar(em);
+      const isStaff = mayReadRuleDrafts(actor);
+      const version = await em.findOne(RuleVersion, params.id, { populate: [...who] });
+      if (version === null || (isToCome(stateOfVersion(version, calendar)) && !isStaff)) {
         throw new AppError('NOT_FOUND');
       }
-      return row;
+      return presentRuleVersion(version, calendar, { withNames: isStaff });
     },
   }),
   defineEndpoint({
@@ -54,18 +66,61 @@ export const rulesEndpoints = [
     body: createRuleVersionInputSchema,
     status: 201,
     response: ruleVersionSchema,
-    handler: async ({ em, body }) => {
-      const { today } = await readCalendar(em);
-      const version = await createRuleVersion(em, body, today);
-      return presentRuleVersion(version, await findRuleInForce(em, today), today);
+    handler: async ({ em, actor, body }) => {
+      const { today } = await readRuleCalendar(em);
+      return presentToStaff(em, await createRuleVersion(em, actor, body, today));
     },
+  }),
+  defineEndpoint({
+    method: 'put',
+    path: '/api/rules/:id',
+    summary: 'Writes a version anew that has not come into force.',
+    access: ['administrator'],
+    params: ruleParams,
+    body: changeRuleDraftInputSchema,
+    response: ruleVersionSchema,
+    handler: async ({ em, actor, params, body }) =>
+      presentToStaff(em, await changeRuleDraft(em, actor, params.id, body)),
+  }),
+  defineEmptyEndpoint({
+    method: 'delete',
+    path: '/api/rules/:id',
+    summary: 'Throws a version away that has not come into force.',
+    access: ['administrator'],
+    params: ruleParams,
+    query: discardRuleDraftQuerySchema,
+    handler: ({ em, params, query }) => discardRuleDraft(em, params.id, query.seen),
+  }),
+  defineEndpoint({
+    method: 'post',
+    path: '/api/rules/:id/enactment',
+    summary: 'Sets the day from which a version holds, or takes it back before it has come.',
+    access: ['administrator'],
+    params: ruleParams,
+    body: enactRuleVersionInputSchema,
+    response: ruleVersionSchema,
+    handler: async ({ em, actor, params, body }) =>
+      presentToStaff(em, await enactRuleVersion(em, actor, params.id, body)),
+  }),
+  defineRawEndpoint({
+    method: 'post',
+    path: '/api/rules/trials',
+    summary:
+      'Judges the case of a finished study by a rule beside the version in force and stores nothing: lines of JSON with the progress, then the result.',
+    access: ['administrator', 'planner'],
+    limit: 'heavy',
+    body: tryRuleInputSchema,
+    produces: 'application/x-ndjson',
+    handler: ({ em, actor, body, request, response }) =>
+      streamRuleTrial(em, actor, body, { request, response }),
   }),
 ];
 
-/** Today in the municipality, and the version that holds. */
-async function readCalendar(
-  em: EntityManager,
-): Promise<{ today: string; inForce: RuleVersion | null }> {
-  const today = civilDateIn(await getMunicipality(em), new Date());
-  return { today, inForce: await findRuleInForce(em, today) };
+/** Only staff may see it. */
+function isToCome(state: ReturnType<typeof stateOfVersion>): boolean {
+  return state === 'draft' || state === 'scheduled';
+}
+
+async function presentToStaff(em: EntityManager, version: RuleVersion) {
+  return presentRuleVersion(version, await readRuleCalendar(em), { withNames: true });
 }

@@ -23,7 +23,7 @@ export function listFindingRows(evidence: EvidenceFile): FindingRow[] {
       return {
         receptor: result.id,
         // A ring is made by the engine and stands in no list of receptors.
-        label: receptor?.label ?? result.id,
+        label: receptor?.label ?? 'Ground around the site',
         class: receptor?.class ?? 'ring',
         clause: clause.clause,
         clauseTitle: clauseTitles.get(clause.clause) ?? clause.clause,
@@ -39,6 +39,8 @@ export function listFindingRows(evidence: EvidenceFile): FindingRow[] {
         margin: test.margin,
         loss: clause.loss,
         band: clause.band,
+        daysNotMet: clause.daysNotMet ?? null,
+        spacingM: clause.spacingM,
         sentence: clause.note,
       };
     }),

@@ -18,6 +18,9 @@ const columns: { title: string; value: (row: FindingRow) => string | number | nu
   { title: 'margin', value: (row) => row.margin },
   { title: 'loss', value: (row) => row.loss },
   { title: 'band', value: (row) => row.band },
+  // Rows of earlier studies do not have these two.
+  { title: 'days_not_met', value: (row) => row.daysNotMet ?? null },
+  { title: 'spacing_m', value: (row) => row.spacingM ?? null },
   { title: 'sentence', value: (row) => row.sentence },
 ];
 

@@ -15,6 +15,12 @@ type Compare = (one: FindingRow, other: FindingRow) => number;
 
 const byText = (one: string, other: string) => one.localeCompare(other, 'en', { numeric: true });
 
+/** Hours and square metres are not held against each other: rows of one unit stay together. */
+const byFigure =
+  (figure: 'before' | 'after' | 'lost' | 'limit' | 'margin'): Compare =>
+  (one, other) =>
+    byText(one.unit, other.unit) || one[figure] - other[figure];
+
 const comparisons = {
   receptor: (one, other) => byText(one.receptor, other.receptor),
   label: (one, other) => byText(one.label, other.label),
@@ -22,10 +28,11 @@ const comparisons = {
   clause: (one, other) => byText(one.clauseTitle, other.clauseTitle),
   day: (one, other) => byText(one.day ?? '', other.day ?? ''),
   finding: (one, other) => findingOrder[one.finding] - findingOrder[other.finding],
-  before: (one, other) => one.before - other.before,
-  after: (one, other) => one.after - other.after,
-  lost: (one, other) => one.lost - other.lost,
-  margin: (one, other) => one.margin - other.margin,
+  before: byFigure('before'),
+  after: byFigure('after'),
+  lost: byFigure('lost'),
+  limit: byFigure('limit'),
+  margin: byFigure('margin'),
   // A receptor that had no sun before has lost nothing.
   loss: (one, other) => (one.loss ?? 0) - (other.loss ?? 0),
 } satisfies Record<string, Compare>;
@@ -42,6 +49,7 @@ const sortFields = [
   'before',
   'after',
   'lost',
+  'limit',
   'margin',
   'loss',
 ] as const satisfies readonly SortField[];
@@ -49,7 +57,7 @@ const sortFields = [
 /** Filters and sorts the findings table; by itself what is not met comes first, the worst margin first. */
 export function selectFindingRows(
   rows: readonly FindingRow[],
-  { finding, clause, q, sort }: Omit<FindingsQuery, 'page' | 'pageSize'>,
+  { finding, clause, class: receptorClass, q, sort }: Omit<FindingsQuery, 'page' | 'pageSize'>,
 ): FindingRow[] {
   const order = parseSort(sort, sortFields, { field: 'finding', direction: 'asc' });
   const sign = order.direction === 'asc' ? 1 : -1;
@@ -60,7 +68,8 @@ export function selectFindingRows(
       (row) =>
         (finding === undefined || row.finding === finding) &&
         (clause === undefined || row.clause === clause) &&
-        (wanted === '' || `${row.receptor} ${row.label}`.toLowerCase().includes(wanted)),
+        (receptorClass === undefined || row.class === receptorClass) &&
+        (wanted === '' || textOf(row).includes(wanted)),
     )
     .sort(
       (one, other) =>
@@ -68,6 +77,11 @@ export function selectFindingRows(
         comparisons.margin(one, other) ||
         comparisons.label(one, other),
     );
+}
+
+/** What a search looks through. */
+function textOf({ receptor, label, clauseTitle, band, sentence }: FindingRow): string {
+  return [receptor, label, clauseTitle, band ?? '', sentence].join(' ').toLowerCase();
 }
 
 /** One page of a list that is whole in memory. */

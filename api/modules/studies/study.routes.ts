@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { caseReferenceSchema } from '../../../shared/contracts/cases.ts';
 import {
   findingPageSchema,
+  findingsSummarySchema,
   instantShadowsSchema,
   listFindingsQuerySchema,
   receptorDetailSchema,
@@ -23,6 +24,7 @@ import { requestStudy } from './request-study.ts';
 import { pageFindingRows, selectFindingRows } from './select-finding-rows.ts';
 import { streamStudyProgress } from './stream-study-progress.ts';
 import type { Study } from './study.entity.ts';
+import { summariseFindings } from './summarise-findings.ts';
 
 const caseParams = z.object({ number: caseReferenceSchema });
 const studyParams = z.object({ id: z.uuid() });
@@ -118,6 +120,16 @@ export const studyEndpoints = [
       const study = await getFinishedStudy(em, actor, params.id, ['findingRows']);
       return pageFindingRows(selectFindingRows(study.findingRows ?? [], query), query);
     },
+  }),
+  defineEndpoint({
+    method: 'get',
+    path: '/api/studies/:id/clauses',
+    summary: 'The findings summed up, clause by clause.',
+    access: 'anybody',
+    params: studyParams,
+    response: findingsSummarySchema,
+    handler: async ({ em, actor, params }) =>
+      summariseFindings(await getFinishedStudy(em, actor, params.id, ['findingRows'])),
   }),
   defineRawEndpoint({
     method: 'get',

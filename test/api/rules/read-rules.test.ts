@@ -127,7 +127,7 @@ describe('a version that is not in force yet', () => {
     const ids = await addVersions(null, '2026-12-02');
     const agent = await api.signIn(reader);
     expect(await statesFor(agent)).toEqual(
-      isShown ? ['3 draft', '2 draft', '1 in-force'] : ['1 in-force'],
+      isShown ? ['3 scheduled', '2 draft', '1 in-force'] : ['1 in-force'],
     );
     for (const id of ids) await agent.get(`/api/rules/${id}`).expect(isShown ? 200 : 404);
   });

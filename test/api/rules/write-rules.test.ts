@@ -108,10 +108,10 @@ describe('a new version', () => {
     expect(body).toEqual(version);
   });
 
-  it('is a draft until its day, which may be far', async () => {
+  it('waits for its day, which may be far', async () => {
     const inForceFrom = '2031-02-28';
     const version = await written({ ...draft(), inForceFrom });
-    expect(version).toMatchObject({ state: 'draft', inForceFrom });
+    expect(version).toMatchObject({ state: 'scheduled', inForceFrom });
   });
 
   it('holds at once from today, by the calendar of the municipality', async () => {

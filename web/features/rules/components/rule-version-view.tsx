@@ -6,6 +6,7 @@ import { describeClause } from '../clause-in-words.ts';
 
 const stateWords = {
   draft: 'draft',
+  scheduled: 'in force',
   'in-force': 'in force',
   retired: 'no longer in force',
 } as const satisfies Record<RuleVersion['state'], string>;
