@@ -1,6 +1,7 @@
 import type { RingRange } from '../geometry/flat-rings.ts';
 import type { Box } from '../geometry/ring.ts';
 import { addEdge, createSweepEdges, type SweepEdges } from './sweep-edges.ts';
+import { listHeights, sortByLowEnd } from './sweep-order.ts';
 
 /**
  * A measure of areas under winding numbers: a sweep over level strips that never builds a polygon,
@@ -104,8 +105,8 @@ function sweep(
   outcomes: Int8Array,
   areas: Float64Array,
 ): void {
-  const heightCount = listHeights(strip, edges, box);
-  sortByLowEnd(strip, edges);
+  const heightCount = listHeights(edges, box, strip.heights);
+  sortByLowEnd(edges, strip.byLowEnd);
   let waiting = 0;
   strip.count = 0;
   for (let index = 0; index + 1 < heightCount; index += 1) {
@@ -257,58 +258,6 @@ function addTrapezoids(
       windings[counter] = winding;
       if (winding > 0) inside |= 1 << counter;
       else inside &= ~(1 << counter);
-    }
-  }
-}
-
-/** The heights at which edges begin or end, and the box's own ends: rising, each once. */
-function listHeights({ heights }: Strip, edges: SweepEdges, box: Box): number {
-  let count = 0;
-  for (let edge = 0; edge < edges.count; edge += 1) {
-    heights[count] = real(edges.lowY, edge);
-    heights[count + 1] = real(edges.highY, edge);
-    count += 2;
-  }
-  heights[count] = box.minY;
-  heights[count + 1] = box.maxY;
-  count += 2;
-  for (const gap of shellGaps) {
-    for (let index = gap; index < count; index += 1) {
-      const moved = real(heights, index);
-      let place = index;
-      while (place >= gap && real(heights, place - gap) > moved) {
-        heights[place] = real(heights, place - gap);
-        place -= gap;
-      }
-      heights[place] = moved;
-    }
-  }
-  let kept = 1;
-  for (let index = 1; index < count; index += 1) {
-    const height = real(heights, index);
-    if (height > real(heights, kept - 1)) {
-      heights[kept] = height;
-      kept += 1;
-    }
-  }
-  return kept;
-}
-
-/** Ciura, M. (2001), "Best increments for the average case of Shellsort", FCT 2001, 106–117. */
-const shellGaps = [701, 301, 132, 57, 23, 10, 4, 1];
-
-function sortByLowEnd({ byLowEnd }: Strip, edges: SweepEdges): void {
-  for (let index = 0; index < edges.count; index += 1) byLowEnd[index] = index;
-  for (const gap of shellGaps) {
-    for (let index = gap; index < edges.count; index += 1) {
-      const moved = whole(byLowEnd, index);
-      const movedY = real(edges.lowY, moved);
-      let place = index;
-      while (place >= gap && real(edges.lowY, whole(byLowEnd, place - gap)) > movedY) {
-        byLowEnd[place] = whole(byLowEnd, place - gap);
-        place -= gap;
-      }
-      byLowEnd[place] = moved;
     }
   }
 }
