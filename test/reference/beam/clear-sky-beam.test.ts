@@ -7,6 +7,7 @@ import {
   pressureAtElevationPa,
   relativeAirMass,
 } from '../../../shared/solar/clear-sky-beam.ts';
+import { sunPositionAt } from '../../../shared/solar/sun-position.ts';
 
 describe('air mass', () => {
   // Kasten and Young (1989), formula values at zenith angles in degrees, worked out from the
@@ -14,7 +15,9 @@ describe('air mass', () => {
   it.each([
     [0, 0.9997],
     [30, 1.154],
+    [45, 1.4126],
     [60, 1.9943],
+    [70, 2.9031],
     [75, 3.8129],
     [80, 5.586],
     [85, 10.3058],
@@ -60,11 +63,36 @@ describe('the clear-sky beam', () => {
     [82.85457, 6.97936, 321.161],
     [46.04676, 1.32355, 888.901],
     [10.56414, 0.93528, 953.249],
+    [34.86074, 1.12008, 922.061],
     [72.41687, 3.01614, 655.449],
   ])('at a zenith angle of %d° follows Ineichen and Perez', (zenithDeg, airMass, expectedWm2) => {
     const beam = beamForAirMassWm2(90 - zenithDeg, airMass, 1364, 0, 3);
     expect(Math.abs(beam - expectedWm2)).toBeLessThan(0.01);
   });
+
+  // Duffie and Beckman's daily extraterrestrial radiation, midsummer over midwinter on level ground,
+  // worked out by their closed form with the declinations ±23.45°: it hangs on the sun's path alone.
+  it.each([
+    [25, 1.78],
+    [40, 3.1],
+    [50, 5.62],
+  ])(
+    'at %d° N brings midsummer so many times midwinter’s energy before the air',
+    (latitude, ratio) => {
+      const dailyWh = (date: string, dayOfYear: number) => {
+        let sum = 0;
+        for (let minute = 0; minute < 1440; minute += 5) {
+          const { altitudeDeg } = sunPositionAt(Date.parse(date) + minute * 60_000, 0, latitude);
+          const sine = Math.sin((altitudeDeg * Math.PI) / 180);
+          if (sine > 0) sum += extraterrestrialNormalWm2(dayOfYear) * sine * (5 / 60);
+        }
+        return sum;
+      };
+      const computed = dailyWh('2026-06-21', 172) / dailyWh('2026-12-21', 355);
+      // Refraction lends the low winter sun a little.
+      expect(Math.abs(computed / ratio - 1)).toBeLessThan(0.03);
+    },
+  );
 
   it('is nothing with the sun at or below the horizon', () => {
     const sky = { dayOfYear: 355, elevationM: 0, linkeTurbidity: 3 };
