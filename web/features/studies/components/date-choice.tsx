@@ -1,3 +1,4 @@
+import { useEffect, useEffectEvent, useState } from 'react';
 import { ChoiceRow } from '../../../components/choice-row.tsx';
 import { useFormats } from '../../../lib/place-context.ts';
 
@@ -6,6 +7,8 @@ export interface DateChoiceProps {
   value: string;
   onChange: (date: string) => void;
 }
+
+const range = { min: '1950-01-01', max: '2099-12-31' } as const;
 
 /** The four key dates, and any other day of the calendar. */
 export function DateChoice({ keyDates, value, onChange }: DateChoiceProps) {
@@ -23,17 +26,37 @@ export function DateChoice({ keyDates, value, onChange }: DateChoiceProps) {
         <span className={isKeyDate ? '' : 'border-b-2 border-marigold font-strong'}>
           Another day
         </span>
-        <input
-          type="date"
-          value={value}
-          min="1950-01-01"
-          max="2099-12-31"
-          className="border border-hairline bg-sheet px-2 py-0.5 text-small"
-          onChange={(event) => {
-            if (event.target.value !== '') onChange(event.target.value);
-          }}
-        />
+        <DayInput value={value} onChange={onChange} />
       </label>
     </div>
+  );
+}
+
+/** The dates between the parts that a person types are dates too: wait until the typing rests. */
+const restMs = 600;
+
+function DayInput({ value, onChange }: Pick<DateChoiceProps, 'value' | 'onChange'>) {
+  const [typed, setTyped] = useState<string | null>(null);
+  const take = useEffectEvent((date: string) => {
+    if (date >= range.min && date <= range.max) onChange(date);
+    setTyped(null);
+  });
+  useEffect(() => {
+    if (typed === null || typed === '') return;
+    const timer = window.setTimeout(() => take(typed), restMs);
+    return () => window.clearTimeout(timer);
+  }, [typed]);
+  return (
+    <input
+      type="date"
+      value={typed ?? value}
+      min={range.min}
+      max={range.max}
+      className="border border-hairline bg-sheet px-2 py-0.5 text-small"
+      onChange={(event) => setTyped(event.target.value)}
+      onBlur={() => {
+        if (typed === '') setTyped(null);
+      }}
+    />
   );
 }
