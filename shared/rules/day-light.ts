@@ -30,6 +30,8 @@ export interface DayLight {
   /** The area that is judged, open or whole, in m²; 1 for a window, whose light is in shares. */
   areaM2: number;
   isWindow: boolean;
+  /** The share that one point of a window's row stands for; 0 where the light is exact. */
+  pointShare: number;
   spans: readonly SpanLight[];
   /** Null where no measure is taken point by point, or the day has no judged time. */
   samples: DaySamples | null;

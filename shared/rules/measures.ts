@@ -64,20 +64,22 @@ export function measureDay(
 
 /**
  * How much a measure's value can change within one step of the clause, or within one grid spacing
- * if that is more: what `close` is about. A single judged instant has no step, so the tolerance is 0.
+ * if that is more: what `close` is about. A single judged instant has no step.
  */
 export function measureTolerance(measure: RuleMeasure, day: DayLight, stepMin: number): number {
-  const stepHours = stepMin / 60;
   const isInstant = day.spans.every((span) => span.atMs.length < 2);
-  if (isInstant) return 0;
+  const stepHours = isInstant ? 0 : stepMin / 60;
+  // The border of a shadow may lie a point further along a window's row, all the time.
+  const judgedHours = day.spans.reduce((sum, span) => sum + integrateHours(span, () => 1), 0);
+  const hours = Math.max(stepHours, day.pointShare * judgedHours);
   switch (measure.kind) {
     case 'sun-hours':
     case 'best-run':
-      return stepHours;
+      return hours;
     case 'sun-area-hours':
-      return stepHours * day.areaM2;
+      return hours * day.areaM2;
     case 'beam-energy':
-      return (stepHours * Math.max(...day.spans.flatMap((span) => span.beamWm2))) / 1000;
+      return (hours * Math.max(0, ...day.spans.flatMap((span) => span.beamWm2))) / 1000;
     case 'shade-share': {
       const changes = day.spans.flatMap((span) =>
         span.lights
@@ -86,12 +88,12 @@ export function measureTolerance(measure: RuleMeasure, day: DayLight, stepMin: n
             Math.abs(light.sunAfterM2 - (span.lights[index]?.sunAfterM2 ?? 0)),
           ),
       );
-      return Math.max(0, ...changes) / day.areaM2;
+      return Math.max(day.pointShare, ...changes.map((changeM2) => changeM2 / day.areaM2));
     }
     case 'sun-share':
     case 'sun-area':
     case 'worst-shade-hours':
-      return samplesTolerance(measure, day, stepHours);
+      return isInstant ? 0 : samplesTolerance(measure, day, stepHours);
   }
 }
 

@@ -14,7 +14,7 @@ export function compareResults(stored: StudyResults, computed: StudyResults): Re
   const { check: _storedCheck, ...before } = stored;
   const { check: _computedCheck, ...after } = computed;
   let lastDigits: ResultsComparison | null = null;
-  for (const difference of differences(before, after, 'results', '')) {
+  for (const difference of differences(before, after, 'results', '', '')) {
     const comparison = describe(difference);
     if (comparison.kind === 'different') return comparison;
     lastDigits ??= comparison;
@@ -25,6 +25,8 @@ export function compareResults(stored: StudyResults, computed: StudyResults): Re
 interface Difference {
   path: string;
   member: string;
+  /** Of the test that the member belongs to. */
+  unit: string;
   stored: unknown;
   computed: unknown;
 }
@@ -34,29 +36,37 @@ function* differences(
   computed: unknown,
   path: string,
   member: string,
+  unit: string,
 ): Generator<Difference> {
   if (Object.is(stored, computed)) return;
   if (isRecord(stored) && isRecord(computed)) {
     for (const key of new Set([...Object.keys(stored), ...Object.keys(computed)])) {
       // A list's items are told by their own member, not by their number.
       const name = Array.isArray(stored) ? member : key;
-      yield* differences(stored[key], computed[key], `${path}.${key}`, name);
+      const ownUnit = typeof stored['unit'] === 'string' ? stored['unit'] : unit;
+      yield* differences(stored[key], computed[key], `${path}.${key}`, name, ownUnit);
     }
     return;
   }
-  yield { path, member, stored, computed };
+  yield { path, member, unit, stored, computed };
+}
+
+/** What the last digit of a rounded figure is worth. */
+function lastDigit(member: string, unit: string): number {
+  if (areaMembers.has(member) || unit === 'm²' || unit === 'm²·h') return 0.01;
+  return unit === 'kWh/m²' ? 0.001 : 0.0001;
 }
 
 function isRecord(value: unknown): value is Record<string, unknown> {
   return typeof value === 'object' && value !== null;
 }
 
-function describe({ path, member, stored, computed }: Difference): ResultsComparison {
+function describe({ path, member, unit, stored, computed }: Difference): ResultsComparison {
   const message = `the file says ${JSON.stringify(stored)}, the computation gives ${JSON.stringify(computed)}`;
   const isLastDigit =
     typeof stored === 'number' &&
     typeof computed === 'number' &&
-    Math.abs(stored - computed) <= (areaMembers.has(member) ? 0.0101 : 0.000101);
+    Math.abs(stored - computed) <= 1.01 * lastDigit(member, unit);
   // A sentence repeats figures that are compared by themselves.
   if (isLastDigit || member === 'note') return { kind: 'last-digits', path, message };
   return { kind: 'different', path, message };

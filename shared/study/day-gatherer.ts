@@ -70,7 +70,7 @@ export function createDayGatherer(
       receptors.map((judged, index) => ({
         date,
         areaM2: judged.areaM2,
-        isWindow: judged.receptor.front !== null,
+        ...kindOf(judged),
         spans: spans.map((atMs) => ({
           atMs,
           lights: atMs.map((at) => taken(lights[index], at)),
@@ -87,8 +87,16 @@ export function createDayGatherer(
 }
 
 /** The light on receptors on a date on which the sun does not stand in the window. */
-export function emptyDayLight(date: string, { receptor, areaM2 }: JudgedReceptor): DayLight {
-  return { date, areaM2, isWindow: receptor.front !== null, spans: [], samples: null };
+export function emptyDayLight(date: string, judged: JudgedReceptor): DayLight {
+  return { date, areaM2: judged.areaM2, ...kindOf(judged), spans: [], samples: null };
+}
+
+function kindOf({
+  receptor: { front },
+}: JudgedReceptor): Pick<DayLight, 'isWindow' | 'pointShare'> {
+  if (front === null) return { isWindow: false, pointShare: 0 };
+  const { count } = front.points;
+  return { isWindow: true, pointShare: count > 1 ? 1 / count : 0 };
 }
 
 function taken<Value>(values: ReadonlyMap<number, Value> | undefined, atMs: number): Value {

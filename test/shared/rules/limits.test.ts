@@ -91,6 +91,7 @@ describe('measures of a day', () => {
     date: '2026-12-21',
     areaM2: 100,
     isWindow: false,
+    pointShare: 0,
     samples: null,
     spans: [
       {

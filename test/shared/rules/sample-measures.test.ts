@@ -26,6 +26,7 @@ function dayOf(hoursOfRow: (row: number) => number): DayLight {
     date: '2026-12-21',
     areaM2: 100,
     isWindow: false,
+    pointShare: 0,
     spans: [
       {
         atMs: [0, 6 * 3_600_000],

@@ -230,6 +230,38 @@ describe('a window', () => {
     expect(Math.abs((west?.clauses[0]?.tests[0]?.before ?? NaN) - 2)).toBeLessThan(0.1);
   });
 
+  it('is close to a limit within one of its points, even at an instant', async () => {
+    const judge = async (atMost: number) => {
+      const evidence = await compute(
+        studyInputOf({
+          blocks: [blockFeature('new', 'proposed', makeRectangle(2, -11, 200, 1), 0, 30)],
+          receptors: [
+            windowFeature(
+              'w',
+              [
+                [0, 0],
+                [4, 0],
+              ],
+              180,
+            ),
+          ],
+          clauses: [
+            clauseOf({
+              ...inWindow,
+              window: { basis: 'solar', from: '12:00', to: '12:00' },
+              measure: { kind: 'shade-share' },
+              limit: { atMost },
+            }),
+          ],
+        }),
+      );
+      return evidence.results.receptors[0]?.clauses[0]?.close;
+    };
+    // The eastern half is hidden: 16 of 32 points, of which one is 3 %.
+    expect(await judge(0.52)).toBe(true);
+    expect(await judge(0.6)).toBe(false);
+  });
+
   it('counts any new shade, since it has no square metre to let pass', async () => {
     const evidence = await compute(
       studyInputOf({
