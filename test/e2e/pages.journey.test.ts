@@ -1,8 +1,8 @@
-import AxeBuilder from '@axe-core/playwright';
 import type { Browser } from 'playwright-core';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import { keepPicture, launchBrowser, visit, type Page } from './browser.ts';
+import { keepPicture, launchBrowser, visit } from './browser.ts';
 import { moveCase } from './drivers/application.ts';
+import { findBarriers } from './drivers/barriers.ts';
 import { signIn, trySignIn, type Account } from './drivers/session.ts';
 
 let browser: Browser;
@@ -12,14 +12,6 @@ beforeAll(async () => {
 });
 
 afterAll(() => browser.close());
-
-/** What axe-core finds at rest, in words that name the rule and the place. */
-async function findBarriers(page: Page): Promise<string[]> {
-  const { violations } = await new AxeBuilder({ page }).analyze();
-  return violations.flatMap(({ id, nodes }) =>
-    nodes.map((node) => `${id}: ${node.target.join(' ')}`),
-  );
-}
 
 interface Screen {
   name: string;
