@@ -159,6 +159,8 @@ function judgeAccount(
   const loss = lossOf(clause.measure, valueOf(clause.measure));
   return {
     ...outcome,
+    // Where nothing changes, nothing hangs on how near the limit is.
+    close: outcome.close && account.isAffected,
     day,
     finding: findingOf(account, outcome.met),
     loss,

@@ -75,10 +75,15 @@ describe('a study', () => {
       studyInputOf({
         blocks: [longBlock('existing', 9), longBlock('proposed', 9)],
         receptors: [yard],
+        // Met by nothing at all, and yet nothing hangs on it.
+        clauses: [clauseOf({ limit: { noWorse: true } })],
       }),
     );
     expect(evidence.results.instants[0]).toMatchObject({ netNew: 0, removed: 0 });
-    expect(evidence.results.receptors[0]?.clauses[0]?.finding).toBe('not-affected');
+    expect(evidence.results.receptors[0]?.clauses[0]).toMatchObject({
+      finding: 'not-affected',
+      close: false,
+    });
     expect(evidence.results.findings.lossIndex).toBe(0);
   });
 
