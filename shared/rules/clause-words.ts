@@ -43,10 +43,9 @@ export function sayRing(
   { from, to }: ReceptorRing,
   figures: Pick<ClauseFigures, 'metres'>,
 ): string {
-  const end = to === undefined ? 'as far as the shadow reaches' : figures.metres(to);
   return to === undefined
-    ? `the ground from ${figures.metres(from)} outside the site's boundary, ${end}`
-    : `the ground from ${figures.metres(from)} to ${end} outside the site's boundary`;
+    ? `the ground from ${figures.metres(from)} outside the site's boundary to where the shadow ends`
+    : `the ground from ${figures.metres(from)} to ${figures.metres(to)} outside the site's boundary`;
 }
 
 /** What a clause holds the proposal against, in English; null where that is what stands now. */

@@ -27,10 +27,12 @@ export function nameReceptor(receptorClass: JudgedClass, label: string): string 
   }
 }
 
+const none = 'none';
+
 /** A length of time as people say it: `3 h 05 min`, `45 min`, `none`. */
 export function sayHours(hours: number): string {
   const minutes = Math.round(hours * 60);
-  if (minutes === 0) return 'none';
+  if (minutes === 0) return none;
   const wholeHours = Math.trunc(minutes / 60);
   const rest = Math.abs(minutes % 60);
   if (wholeHours === 0) return `${minutes} min`;
@@ -132,48 +134,71 @@ export function describeFinding(
   const values =
     test === undefined
       ? ''
-      : ` has ${sayValue(measure.kind, test.before)} of ${sayMeasured(measure)} ${states.before} and ${sayValue(measure.kind, test.after)} ${states.after}`;
+      : ` has ${sayAmount(measure, test.before, receptorClass)} ${states.before} and ${sayValue(measure.kind, test.after)} ${states.after}`;
   const asks = leaves
-    .map((leaf, index) => sayLimit(leaf, judgement.tests[index], clause))
+    .map((leaf, index) => sayLimit(leaf, judgement.tests[index], clause, states.before))
     .join('allOf' in clause.limit ? ', and ' : ', or ');
   return [
     `${when}, ${nameReceptor(receptorClass, label)}${values}.`,
     `The rule asks for ${asks}.`,
-    endings[judgement.finding],
+    sayEnding(judgement),
     ...saySampling(judgement.tests, spacingM),
   ].join(' ');
+}
+
+/** A value with the thing that it is of: `3 h of sun …`, `no sun …`. */
+function sayAmount(measure: RuleMeasure, value: number, receptorClass: JudgedClass): string {
+  const said = sayValue(measure.kind, value);
+  const of = sayMeasured(measure);
+  const measured = receptorClass === 'window' ? of.replace('its area', 'its width') : of;
+  return said === none ? `no ${measured}` : `${said} of ${measured}`;
+}
+
+function sayEnding({ finding, daysNotMet }: ClauseJudgement): string {
+  if (finding !== 'not-met' || daysNotMet === null || daysNotMet < 2) return endings[finding];
+  return `Not met on ${daysNotMet} of the season's days, of which this is the worst.`;
 }
 
 /** How finely sample points lie, and what twice the spacing would change. */
 function saySampling(tests: readonly LimitTest[], spacingM: number | null): string[] {
   const sampled = tests.find((test) => test.samplingError !== null);
   if (spacingM === null || sampled === undefined) return [];
-  const error = sayDifference(sampled.measure, sampled.samplingError ?? 0);
+  const difference = sayDifference(sampled.measure, sampled.samplingError ?? 0);
   return [
-    `Taken at points ${spacingM.toFixed(2)} m apart; points twice as far apart change the figure by at most ${error}.`,
+    `Taken at points ${spacingM.toFixed(2)} m apart; points twice as far apart change the figure by ${difference}.`,
   ];
 }
 
 /** A small difference keeps a digit more than a value. */
 function sayDifference(measure: MeasureKind, difference: number): string {
-  if (measure === 'sun-share') return `${(difference * 100).toFixed(1)} %`;
-  if (measure === 'sun-area') return `${difference.toFixed(1)} m²`;
-  const minutes = Math.round(difference * 60);
-  return minutes === 0 ? 'less than a minute' : sayHours(difference);
+  const atMost = (value: string, unit: string) =>
+    Number(value) === 0
+      ? `less than ${value.replace(/0$/, '1')} ${unit}`
+      : `at most ${value} ${unit}`;
+  if (measure === 'sun-share') return atMost((difference * 100).toFixed(1), '%');
+  if (measure === 'sun-area') return atMost(difference.toFixed(1), 'm²');
+  const said = sayHours(difference);
+  return said === none ? 'less than a minute' : `at most ${said}`;
 }
 
-function sayLimit(leaf: LimitLeaf, test: LimitTest | undefined, clause: RuleClause): string {
+function sayLimit(
+  leaf: LimitLeaf,
+  test: LimitTest | undefined,
+  clause: RuleClause,
+  before: string,
+): string {
   const kind = leaf.measure?.kind ?? clause.measure.kind;
   if ('atLeast' in leaf) return `at least ${sayValue(kind, leaf.atLeast)}`;
   if ('atMost' in leaf) return `at most ${sayValue(kind, leaf.atMost)}`;
   if ('losesAtMost' in leaf) return `a loss of at most ${sayValue(kind, leaf.losesAtMost)}`;
   if ('keeps' in leaf) {
-    const share = `${(leaf.keeps * 100).toFixed(0)} % of what there was`;
+    const whole = clause.baseline === undefined ? 'what there was' : `what there is ${before}`;
+    const share = `${(leaf.keeps * 100).toFixed(0)} % of ${whole}`;
     return test === undefined ? share : `${share} (${sayValue(kind, test.limit)})`;
   }
   if ('losesAtMostShare' in leaf) {
     const share = `a loss of at most ${(leaf.losesAtMostShare * 100).toFixed(1)} %`;
     return test === undefined ? share : `${share} (${sayValue(kind, test.limit)})`;
   }
-  return 'no worse than before';
+  return `no worse than ${before}`;
 }

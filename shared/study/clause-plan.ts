@@ -29,6 +29,8 @@ export interface ClausePlan extends ClauseBlocks {
   /** For each date, the instants of each stretch of its window. */
   spansOfDate: Map<string, number[][]>;
   receptors: JudgedReceptor[];
+  /** The ring that it judges, shown like any other receptor. */
+  ring: SceneReceptor | null;
 }
 
 /** Below this a receptor is built over and has nothing to judge, m². */
@@ -64,6 +66,7 @@ export function planClauses(input: StudyInput, scene: Scene, clipper: Clipper): 
       clause,
       groups,
       spansOfDate,
+      ring: ringReceptor,
       receptors: receptors.flatMap((receptor) =>
         judgeOn(receptor, clause, scene, standing, input.settings.gridM),
       ),

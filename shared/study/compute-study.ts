@@ -12,7 +12,7 @@ import { lightAtInstant, type InstantLight, type Reach } from './instant-light.t
 import { createStudyJudge } from './judge-study.ts';
 import { defaultInstants } from './key-date-instants.ts';
 import { roundArea, roundMeasure } from './rounding.ts';
-import { buildScene, type Scene, type SceneReceptor } from './scene.ts';
+import { buildScene, type Scene } from './scene.ts';
 
 export interface ComputeStudyOptions {
   clipper: Clipper;
@@ -41,8 +41,8 @@ export async function computeStudy(
 ): Promise<ComputedStudy> {
   const builtScene = buildScene(input);
   const plans = planClauses(input, builtScene, options.clipper);
-  // Rings are shown like any other receptor.
-  const scene = { ...builtScene, receptors: [...builtScene.receptors, ...ringsOf(plans)] };
+  const rings = plans.flatMap(({ ring }) => ring ?? []);
+  const scene = { ...builtScene, receptors: [...builtScene.receptors, ...rings] };
   const judge = createStudyJudge(plans, input, scene.sampler, (plan) => plan.blocks);
   const cumulativeJudge =
     scene.cumulativeBlocks === null
@@ -162,12 +162,6 @@ function reachOfReceptors({ receptors }: Scene, plans: readonly ClausePlan[]): R
       Infinity,
     ),
   };
-}
-
-function ringsOf(plans: readonly ClausePlan[]): SceneReceptor[] {
-  return plans.flatMap((plan) =>
-    plan.receptors.flatMap(({ receptor }) => (receptor.class === 'ring' ? [receptor] : [])),
-  );
 }
 
 function listedInstants(input: StudyInput): string[] {

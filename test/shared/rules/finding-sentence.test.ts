@@ -71,6 +71,7 @@ describe('the sentence of a finding', () => {
     expect(sentence).toContain(
       'has 10 % of its area in shade at the worst judged instant with a wall of 3.66 m and 30 % with the proposal.',
     );
+    expect(sentence).toContain('The rule asks for no worse than with a wall of 3.66 m.');
     expect(sentence).not.toContain('points');
   });
 
@@ -97,13 +98,58 @@ describe('the sentence of a finding', () => {
   });
 });
 
+describe('the sentence of a finding with nothing in it', () => {
+  const clause = clauseSchema.parse(
+    clauseOf({ measure: { kind: 'worst-shade-hours' }, limit: { atMost: 2 } }),
+  );
+  const shade = test({
+    measure: 'worst-shade-hours',
+    unit: 'h',
+    before: 0,
+    after: 4,
+    samplingError: 0.001,
+  });
+
+  it('says no shade, and less than a minute', () => {
+    const sentence = describeFinding(clause, judgement([shade]), 'ring', 'the ground', 0.5);
+    expect(sentence).toContain(
+      'the ground has no shade in the judged hours at its most shaded point before and 4 h after.',
+    );
+    expect(sentence).toContain('change the figure by less than a minute.');
+  });
+
+  it('says on how many days of a season it is not met', () => {
+    const season = { ...judgement([shade]), daysNotMet: 7 };
+    expect(describeFinding(clause, season, 'ring', 'the ground', null)).toContain(
+      "Not met on 7 of the season's days, of which this is the worst.",
+    );
+  });
+
+  it('speaks of the width of a window', () => {
+    const share = clauseSchema.parse(
+      clauseOf({ measure: { kind: 'sun-share', hours: 1 }, limit: { atLeast: 0.5 } }),
+    );
+    const sentence = describeFinding(
+      share,
+      judgement([test({ samplingError: 0 })]),
+      'window',
+      '12 Netloft Lane',
+      0.1,
+    );
+    expect(sentence).toContain(
+      'the window at 12 Netloft Lane has 80 % of its width with at least 1 h',
+    );
+    expect(sentence).toContain('change the figure by less than 0.1 %.');
+  });
+});
+
 describe('the words of a clause', () => {
   it('name a ring and a baseline', () => {
     expect(sayRing({ from: 5, to: 10 }, figures)).toBe(
       "the ground from 5 m to 10 m outside the site's boundary",
     );
     expect(sayRing({ from: 10 }, figures)).toBe(
-      "the ground from 10 m outside the site's boundary, as far as the shadow reaches",
+      "the ground from 10 m outside the site's boundary to where the shadow ends",
     );
     expect(sayBaseline(undefined, figures)).toBeNull();
     expect(sayBaseline({ wall: 3.66, with: ['context'] }, figures)).toBe(

@@ -170,6 +170,25 @@ describe('a ring', () => {
     expect(Math.abs(shade - (60 * 24.3) / expectedM2)).toBeLessThan(0.01);
   });
 
+  it('is checked by its polygons like any other receptor', async () => {
+    const evidence = await compute(
+      studyInputOf({
+        site,
+        blocks: [
+          blockFeature('house', 'context', makeRectangle(0, 2, 8, 8), 0, 6),
+          blockFeature('new', 'proposed', makeRectangle(0, -25, 20, 10), 0, 14),
+        ],
+        receptors: [],
+        // The house's ground is cut out of what is judged, and not of what is shown.
+        clauses: [
+          clauseOf({ receptors: { ring: { from: 5, to: 40 } }, baseline: 'proposal-alone' }),
+        ],
+      }),
+    );
+    expect(evidence.results.instants[0]?.netNew).toBeGreaterThan(100);
+    expect(evidence.results.check?.largestDifferenceM2).toBeLessThan(1e-3);
+  });
+
   it('says no-receptor where no shadow reaches it', async () => {
     const evidence = await compute(
       studyInputOf({
