@@ -36,16 +36,41 @@ export function bandPaths(samples: readonly BandSample[], box: BandBox): BandPat
     lower: (one: BandSample) => number,
     upper: (one: BandSample) => number,
   ) => {
-    if (!samples.some((one) => upper(one) - lower(one) > 1e-6)) return '';
     const point = (one: BandSample, share: number) =>
       `${xOf(one.atMs).toFixed(2)} ${(bottom - share * height).toFixed(2)}`;
-    const along = samples.map((one) => point(one, upper(one)));
-    const back = samples.toReversed().map((one) => point(one, lower(one)));
-    return `M${along.join('L')}L${back.join('L')}Z`;
+    return runsWith(samples, (one) => upper(one) - lower(one) > leastShare)
+      .map((run) => {
+        const along = run.map((one) => point(one, upper(one)));
+        const back = run.toReversed().map((one) => point(one, lower(one)));
+        return `M${along.join('L')}L${back.join('L')}Z`;
+      })
+      .join('');
   };
   return {
     before: area(beforeBottom, zero, (one) => one.shareBefore),
     after: area(afterBottom, zero, kept),
     lost: area(afterBottom, kept, had),
   };
+}
+
+/** A smaller share is rounding. */
+const leastShare = 1e-6;
+
+/**
+ * The stretches in which something is there, each with the samples between which it begins and ends;
+ * where nothing is, no outline may seem to say otherwise.
+ */
+function runsWith(
+  samples: readonly BandSample[],
+  isThere: (one: BandSample) => boolean,
+): BandSample[][] {
+  const runs: BandSample[][] = [];
+  samples.slice(1).forEach((to, index) => {
+    const from = samples[index];
+    if (from === undefined || !(isThere(from) || isThere(to))) return;
+    const last = runs.at(-1);
+    if (last?.at(-1) === from) last.push(to);
+    else runs.push([from, to]);
+  });
+  return runs;
 }

@@ -24,6 +24,19 @@ describe('bandPaths', () => {
     expect(bandPaths(samples, box).lost).toBe('');
   });
 
+  it('outlines the stretches of a loss apart, and nothing between them', () => {
+    const shares = [0.5, 0, 0.5, 0.5, 0.5, 0, 0.5];
+    const samples = shares.map((shareAfter, atMs) => ({ atMs, shareBefore: 0.5, shareAfter }));
+    const outlines = bandPaths(samples, box).lost.split('M').slice(1);
+    const xs = outlines.map((one) => [...one.matchAll(/(\d+\.\d\d) /g)].map(([, x]) => Number(x)));
+    expect(xs.map((all) => [Math.min(...all), Math.max(...all)])).toEqual([
+      [0, 2],
+      [4, 6],
+    ]);
+    // Each is a triangle of half the height over two steps.
+    expect(outlines.map((one) => area(`M${one}`))).toEqual([5, 5]);
+  });
+
   it('draws nothing where there is no sun at all', () => {
     const samples: BandSample[] = [
       { atMs: 0, shareBefore: 0, shareAfter: 0 },
