@@ -1,6 +1,7 @@
+import type { RingRange } from '../geometry/flat-rings.ts';
 import type { Box } from '../geometry/ring.ts';
-import { flattenBlocks, type FlatBlocks, type IndexedBlocks } from './shadow-layer.ts';
-import { makeSunFrame, type SunDirection, type SunFrame } from './sun-frame.ts';
+import type { FlatBlocks, IndexedBlocks } from './shadow-layer.ts';
+import { makeSunFrame, type SunDirection } from './sun-frame.ts';
 
 /**
  * The blocks whose shadows can reach a part of the local plane, in their own order: those that
@@ -12,49 +13,64 @@ import { makeSunFrame, type SunDirection, type SunFrame } from './sun-frame.ts';
  * @throws RangeError when the sun is not above the horizon
  */
 export function blocksTowardSun(
-  { blocks, index, highestTopM }: IndexedBlocks,
+  scene: IndexedBlocks,
   sun: SunDirection,
   within: Box,
   lowestPlaneM: number,
 ): FlatBlocks {
-  const frame = makeSunFrame(sun);
-  const reachM = Math.max(highestTopM - lowestPlaneM, 0) * frame.cotangent;
-  const towardX = -frame.awayX * reachM;
-  const towardY = -frame.awayY * reachM;
-  const found = index?.search(
-    within.minX + Math.min(towardX, 0),
-    within.minY + Math.min(towardY, 0),
-    within.maxX + Math.max(towardX, 0),
-    within.maxY + Math.max(towardY, 0),
+  const { awayX, awayY, cotangent } = makeSunFrame(sun);
+  const reachM = Math.max(scene.highestTopM - lowestPlaneM, 0) * cotangent;
+  const towardX = -awayX * reachM;
+  const towardY = -awayY * reachM;
+  const found =
+    scene.index?.search(
+      within.minX + Math.min(towardX, 0),
+      within.minY + Math.min(towardY, 0),
+      within.maxX + Math.max(towardX, 0),
+      within.maxY + Math.max(towardY, 0),
+    ) ?? [];
+  // In the sun's frame: how far the middles lie apart, and how far the two boxes reach from theirs.
+  const chosen = found.filter((at) => {
+    const block = scene.blocks[at]?.block;
+    if (block === undefined) return false;
+    const farM = (block.topM - lowestPlaneM) * cotangent;
+    if (farM <= 0) return false;
+    const { minX, minY, maxX, maxY } = block.box;
+    const eastM = (within.minX + within.maxX - minX - maxX) / 2;
+    const northM = (within.minY + within.maxY - minY - maxY) / 2;
+    const halfX = (within.maxX - within.minX + maxX - minX) / 2;
+    const halfY = (within.maxY - within.minY + maxY - minY) / 2;
+    const acrossM = Math.abs(northM * awayX - eastM * awayY);
+    if (acrossM > halfY * Math.abs(awayX) + halfX * Math.abs(awayY)) return false;
+    const alongM = eastM * awayX + northM * awayY;
+    const reachesM = halfX * Math.abs(awayX) + halfY * Math.abs(awayY);
+    return alongM >= -reachesM && alongM <= reachesM + farM;
+  });
+  return pickBlocks(
+    scene,
+    chosen.sort((a, b) => a - b),
   );
-  const wanted = turnedBox(within, frame);
-  const standing = (found ?? [])
-    .sort((a, b) => a - b)
-    .flatMap((at) => blocks[at]?.block ?? [])
-    .filter((block) => {
-      const shadow = turnedBox(block.box, frame);
-      const farM = (block.topM - lowestPlaneM) * frame.cotangent;
-      return (
-        farM > 0 &&
-        shadow.minY <= wanted.maxY &&
-        shadow.maxY >= wanted.minY &&
-        shadow.minX <= wanted.maxX &&
-        shadow.maxX + farM >= wanted.minX
-      );
-    });
-  return flattenBlocks(standing);
 }
 
-/** The box in a sun's frame around a box of the local plane. */
-function turnedBox({ minX, minY, maxX, maxY }: Box, { awayX, awayY }: SunFrame): Box {
-  const middleX = ((minX + maxX) * awayX + (minY + maxY) * awayY) / 2;
-  const middleY = ((minY + maxY) * awayX - (minX + maxX) * awayY) / 2;
-  const alongM = ((maxX - minX) * Math.abs(awayX) + (maxY - minY) * Math.abs(awayY)) / 2;
-  const acrossM = ((maxY - minY) * Math.abs(awayX) + (maxX - minX) * Math.abs(awayY)) / 2;
-  return {
-    minX: middleX - alongM,
-    minY: middleY - acrossM,
-    maxX: middleX + alongM,
-    maxY: middleY + acrossM,
-  };
+function pickBlocks({ points, blocks }: FlatBlocks, chosen: readonly number[]): FlatBlocks {
+  let length = 0;
+  const picked = chosen.flatMap((at) => {
+    const one = blocks[at];
+    if (one === undefined) return [];
+    const rings = one.rings.map(({ start, end }): RingRange & { from: number } => {
+      const placed = { from: start, start: length, end: length + end - start };
+      length = placed.end;
+      return placed;
+    });
+    return [{ block: one.block, rings }];
+  });
+  const pickedPoints = new Float64Array(length);
+  for (const { rings } of picked) {
+    for (const { from, start, end } of rings) {
+      for (let index = start; index < end; index += 1) {
+        pickedPoints[index] = points[from + index - start] ?? NaN;
+      }
+    }
+  }
+  return { points: pickedPoints, blocks: picked };
 }

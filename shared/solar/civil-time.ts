@@ -2,11 +2,36 @@ import { DateTime } from 'luxon';
 
 const dayMs = 86_400_000;
 
-/** An instant as RFC 3339 with the zone's offset: `2026-12-21T12:00:00-06:00`; whole seconds. */
+/** An instant as RFC 3339 with the zone's offset: `2026-12-21T12:00:00-06:00`. */
 export function formatInstant(atMs: number, timeZone: string): string {
-  const text = DateTime.fromMillis(atMs, { zone: timeZone }).toISO({ suppressMilliseconds: true });
-  if (text === null) throw new RangeError(`${timeZone} is no time zone that this program knows.`);
-  return text.replace(/Z$/, '+00:00');
+  return createInstantFormat(timeZone)(atMs);
+}
+
+/**
+ * Makes `formatInstant` for many instants of one zone: its offset is looked up once for each half
+ * hour, since no zone of our days changes its clocks within one.
+ *
+ * @throws RangeError, when used, for a zone that is not known
+ */
+export function createInstantFormat(timeZone: string): (atMs: number) => string {
+  const offsetsMin = new Map<number, number>();
+  const offsetAt = (atMs: number): number => {
+    const halfHour = Math.floor(atMs / 1_800_000);
+    const known = offsetsMin.get(halfHour);
+    if (known !== undefined) return known;
+    const { offset, isValid } = DateTime.fromMillis(atMs, { zone: timeZone });
+    if (!isValid) throw new RangeError(`${timeZone} is no time zone that this program knows.`);
+    offsetsMin.set(halfHour, offset);
+    return offset;
+  };
+  return (atMs) => {
+    const offsetMin = offsetAt(atMs);
+    const shown = new Date(atMs + offsetMin * 60_000).toISOString().replace(/(\.000)?Z$/, '');
+    const sign = offsetMin < 0 ? '-' : '+';
+    const two = (value: number) => String(value).padStart(2, '0');
+    const awayMin = Math.abs(offsetMin);
+    return `${shown}${sign}${two(Math.floor(awayMin / 60))}:${two(awayMin % 60)}`;
+  };
 }
 
 /** The civil date of an instant in a zone: `2026-12-21`. */

@@ -3,7 +3,7 @@ import { integrateHours, runsAbove, type Run, type SpanLight } from '../rules/da
 import { instantsOfSpan } from '../rules/rule-window.ts';
 import { blocksTowardSun } from '../shadow/blocks-toward-sun.ts';
 import { createShadowCaster } from '../shadow/shadow-layer.ts';
-import { formatInstant, wholeClockHours } from '../solar/civil-time.ts';
+import { createInstantFormat, wholeClockHours } from '../solar/civil-time.ts';
 import { keyDatesOfYear } from '../solar/key-dates.ts';
 import { sunAboveSpans } from '../solar/sun-above.ts';
 import { sunPositionAt } from '../solar/sun-position.ts';
@@ -81,7 +81,7 @@ export function computeLedgerDay(
       }),
     );
   });
-  const instant = (atMs: number) => formatInstant(atMs, timezone);
+  const instant = createInstantFormat(timezone);
   const first = spans[0];
   const last = spans.at(-1);
   return {

@@ -3,6 +3,7 @@ import { loadClipper } from '../../api/clipper.ts';
 import { computeStudy } from '../../shared/study/compute-study.ts';
 import type { StudyInput } from '../../shared/study/evidence-schema.ts';
 import { compareAreas } from './areas-section.ts';
+import { benchBrowserWorker, describeBrowserWorker } from './browser-worker.ts';
 import {
   growthWithBlocks,
   growthWithInstants,
@@ -27,6 +28,7 @@ const sections: [string, () => string | Promise<string>][] = [
   ['## Growth with receptors', () => growthWithReceptors(town)],
   ['## Growth with instants', () => growthWithInstants(clipper, town)],
   ['## The naive pipeline', naiveGrowth],
+  ["## In the browser's worker", async () => describeBrowserWorker(await benchBrowserWorker())],
 ];
 const parts: string[] = [];
 for (const [heading, measure] of sections) {

@@ -1,8 +1,10 @@
+import { DateTime } from 'luxon';
 import { describe, expect, it } from 'vitest';
 import {
   civilClockToMs,
   civilDateOf,
   civilDayBounds,
+  createInstantFormat,
   formatInstant,
   standardClockToMs,
   standardOffsetMin,
@@ -72,6 +74,22 @@ describe('standard time', () => {
       formatInstant(standardClockToMs(date, '10:00', 'America/Chicago'), 'America/Chicago'),
     );
     expect(hours).toEqual(['2026-03-07T10:00:00-06:00', '2026-03-09T11:00:00-05:00']);
+  });
+});
+
+describe('an instant in writing', () => {
+  it('carries the offset of its zone on both sides of a change, as luxon has it', () => {
+    for (const zone of ['America/Chicago', 'Australia/Lord_Howe', 'Asia/Kathmandu', 'Etc/UTC']) {
+      const format = createInstantFormat(zone);
+      for (let atMs = Date.UTC(2026, 2, 1); atMs < Date.UTC(2026, 3, 10); atMs += 1_234_567) {
+        const expected = DateTime.fromMillis(atMs, { zone }).toISO({ suppressMilliseconds: true });
+        expect(format(atMs)).toBe(expected?.replace(/Z$/, '+00:00'));
+      }
+    }
+  });
+
+  it('is refused in a zone that is not known', () => {
+    expect(() => formatInstant(0, 'Mars/Olympus')).toThrow('Mars/Olympus is no time zone');
   });
 });
 
