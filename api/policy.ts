@@ -9,6 +9,7 @@ import type { CaseState, CaseTransition } from '../shared/contracts/case-life.ts
 import { caseAbilities } from '../shared/contracts/cases.ts';
 import type { CaseAbility } from '../shared/contracts/cases.ts';
 import type { Role } from '../shared/contracts/people.ts';
+import type { RuleAbility, RuleVersionState } from '../shared/contracts/rules.ts';
 
 /** Who acts: somebody signed in, or null for the public. */
 export interface Actor {
@@ -107,6 +108,21 @@ export function transitionsOnCase(actor: Actor | null, facts: CaseFacts): CaseTr
 /** Whether this person may read a version of the rule that is not in force yet. */
 export function mayReadRuleDrafts(actor: Actor | null): boolean {
   return actor?.role === 'administrator' || actor?.role === 'planner';
+}
+
+/** Who writes the rule, and who tries it on a case. */
+export const ruleWriters = ['administrator'] as const satisfies readonly Role[];
+export const ruleTriers = ['administrator', 'planner'] as const satisfies readonly Role[];
+
+/** All that this person may do with a version of the rule now: one that has come into force stays as it is. */
+export function abilitiesOnRule(actor: Actor | null, state: RuleVersionState): RuleAbility[] {
+  const isKept = state === 'in-force' || state === 'retired';
+  const may = (roles: readonly Role[]) => actor !== null && roles.includes(actor.role);
+  return [
+    ...(may(ruleWriters) ? (['copy'] as const) : []),
+    ...(may(ruleWriters) && !isKept ? (['change', 'enact'] as const) : []),
+    ...(may(ruleTriers) ? (['try'] as const) : []),
+  ];
 }
 
 function partiesOf(actor: Actor | null, facts: CaseFacts): Party[] {

@@ -5,6 +5,11 @@ import { ruleSchema } from '../rules/rule-schema.ts';
 export const ruleVersionStateSchema = z.enum(['draft', 'scheduled', 'in-force', 'retired']);
 export type RuleVersionState = z.infer<typeof ruleVersionStateSchema>;
 
+/** What the signed-in person may do with a version now; buttons follow these, and the server checks them again. */
+export const ruleAbilities = ['copy', 'change', 'enact', 'try'] as const;
+export const ruleAbilitySchema = z.enum(ruleAbilities);
+export type RuleAbility = z.infer<typeof ruleAbilitySchema>;
+
 /** When something was done, and by whom: null for the set-up of the server, and to the public. */
 const deedSchema = z.object({ at: z.iso.datetime(), by: z.string().nullable() });
 
@@ -20,10 +25,15 @@ export const ruleVersionSchema = z.object({
   enacted: deedSchema.nullable(),
   /** Changes with every change of the version; sent back with the next one. */
   stamp: z.string(),
+  abilities: z.array(ruleAbilitySchema),
 });
 export type RuleVersion = z.infer<typeof ruleVersionSchema>;
 
-export const ruleVersionListSchema = z.object({ rows: z.array(ruleVersionSchema) });
+export const ruleVersionListSchema = z.object({
+  rows: z.array(ruleVersionSchema),
+  /** Whether the person may write versions of the rule at all. */
+  mayWrite: z.boolean(),
+});
 
 /** What the register of versions keeps of an id. */
 const ruleIdLength = 100;

@@ -15,6 +15,10 @@ export const paths = {
     href: (reference: string, search?: { receptor?: string }) =>
       withSearch(`/cases/${reference}`, search),
   },
+  caseFindings: {
+    path: '/cases/:reference/findings',
+    href: (reference: string) => `/cases/${reference}/findings`,
+  },
   applications: { path: '/applications', href: () => '/applications' },
   newApplication: { path: '/applications/new', href: () => '/applications/new' },
   application: {
@@ -29,6 +33,20 @@ export const paths = {
   },
   hearings: { path: '/hearings', href: () => '/hearings' },
   adminRules: { path: '/admin/rules', href: () => '/admin/rules' },
+  newRule: {
+    path: '/admin/rules/new',
+    href: (search?: { from?: string }) => withSearch('/admin/rules/new', search),
+  },
+  rule: {
+    path: '/admin/rules/:id',
+    href: (id: string, search?: { against?: string }) => withSearch(`/admin/rules/${id}`, search),
+  },
+  ruleEdit: { path: '/admin/rules/:id/edit', href: (id: string) => `/admin/rules/${id}/edit` },
+  ruleTrial: {
+    path: '/admin/rules/:id/trial',
+    href: (id: string, search?: { case?: string }) =>
+      withSearch(`/admin/rules/${id}/trial`, search),
+  },
 } as const;
 
 function withSearch(path: string, search: Record<string, string | undefined> = {}): string {

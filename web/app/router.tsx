@@ -8,6 +8,7 @@ import { ErrorPage } from './pages/error-page.tsx';
 import { HomePage } from './pages/home-page.tsx';
 import { NotFoundPage } from './pages/not-found-page.tsx';
 import { paths } from './paths.ts';
+import { ruleRoutes, ruleTrialRoutes, ruleWritingRoutes } from './rule-routes.ts';
 
 /** The first public page comes with the shell; every other page is loaded when it is opened. */
 export const router = createBrowserRouter([
@@ -25,15 +26,16 @@ export const router = createBrowserRouter([
             lazy: async () => ({ Component: (await import('./pages/case-page.tsx')).CasePage }),
           },
           {
+            path: paths.caseFindings.path,
+            lazy: async () => ({
+              Component: (await import('./pages/case-findings-page.tsx')).CaseFindingsPage,
+            }),
+          },
+          {
             path: paths.method.path,
             lazy: async () => ({ Component: (await import('./pages/method-page.tsx')).MethodPage }),
           },
-          {
-            path: paths.adminRules.path,
-            lazy: async () => ({
-              Component: (await import('./pages/admin-rules-page.tsx')).AdminRulesPage,
-            }),
-          },
+          ...ruleRoutes,
           {
             path: paths.signIn.path,
             lazy: async () => ({
@@ -83,8 +85,9 @@ export const router = createBrowserRouter([
           },
           {
             element: <RequireRole roles={['planner', 'administrator']} />,
-            children: deskRoutes,
+            children: [...deskRoutes, ...ruleTrialRoutes],
           },
+          { element: <RequireRole roles={['administrator']} />, children: ruleWritingRoutes },
           ...designRoutes,
           { path: '*', element: <NotFoundPage /> },
         ],

@@ -7,10 +7,13 @@ import { FieldDescription, FieldLabel, FieldProblem } from './field-parts.tsx';
 export interface SelectFieldProps<Key extends string> {
   label: string;
   options: readonly { id: Key; label: string }[];
-  value: Key;
+  /** Null where nothing is chosen yet. */
+  value: Key | null;
   onChange: (value: Key) => void;
   description?: string;
-  problem?: string;
+  problem?: string | undefined;
+  /** Stands where nothing is chosen yet. */
+  placeholder?: string;
   className?: string;
 }
 
@@ -22,11 +25,13 @@ export function SelectField<Key extends string>({
   onChange,
   description,
   problem,
+  placeholder = 'Choose …',
   className = '',
 }: SelectFieldProps<Key>) {
   return (
     <Select
       value={value}
+      placeholder={placeholder}
       onChange={(key) => {
         const chosen = options.find((option) => option.id === key);
         if (chosen !== undefined) onChange(chosen.id);

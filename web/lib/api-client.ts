@@ -42,6 +42,26 @@ export async function callApiForNothing(path: string, request: ApiRequest): Prom
   await send(path, request);
 }
 
+/** Calls the API where the answer comes line by line, each of them JSON. */
+export async function* callApiForLines<Schema extends z.ZodType>(
+  schema: Schema,
+  path: string,
+  request: ApiRequest,
+): AsyncGenerator<z.output<Schema>> {
+  const { body } = await send(path, request);
+  if (body === null) return;
+  const decoder = new TextDecoder();
+  let rest = '';
+  for (const reader = body.getReader(); ;) {
+    const { value, done } = await reader.read();
+    rest += decoder.decode(value, { stream: !done });
+    const lines = rest.split('\n');
+    rest = done ? '' : (lines.pop() ?? '');
+    for (const line of lines) if (line.trim() !== '') yield schema.parse(JSON.parse(line));
+    if (done) return;
+  }
+}
+
 async function send(path: string, request: ApiRequest): Promise<Response> {
   const { method = 'GET', body, query, idempotencyKey, signal } = request;
   const headers = new Headers({ Accept: 'application/json, application/problem+json' });

@@ -2,6 +2,7 @@ import type {
   RuleVersion as RuleVersionDetail,
   RuleVersionState,
 } from '../../../shared/contracts/rules.ts';
+import { abilitiesOnRule, mayReadRuleDrafts, type Actor } from '../../policy.ts';
 import type { Person } from '../people/person.entity.ts';
 import type { RuleVersion } from './rule-version.entity.ts';
 
@@ -32,19 +33,22 @@ export function stampOf({ createdAt, changedAt, enactedAt }: RuleVersion): strin
 export function presentRuleVersion(
   version: RuleVersion,
   calendar: RuleCalendar,
-  { withNames }: { withNames: boolean },
+  actor: Actor | null,
 ): RuleVersionDetail {
+  const withNames = mayReadRuleDrafts(actor);
+  const state = stateOfVersion(version, calendar);
   const nameOf = (by: Person | null | undefined) => (withNames ? (by?.name ?? null) : null);
   const deed = (at: Date | null | undefined, by: Person | null | undefined) =>
     at instanceof Date ? { at: at.toISOString(), by: nameOf(by) } : null;
   return {
     id: version.id,
-    state: stateOfVersion(version, calendar),
+    state,
     inForceFrom: version.inForceFrom ?? null,
     rule: version.rule,
     created: { at: version.createdAt.toISOString(), by: nameOf(version.createdBy) },
     changed: deed(version.changedAt, version.changedBy),
     enacted: deed(version.enactedAt, version.enactedBy),
     stamp: stampOf(version),
+    abilities: abilitiesOnRule(actor, state),
   };
 }

@@ -11,7 +11,7 @@ import {
 } from '../../../shared/contracts/rules.ts';
 import { defineEmptyEndpoint, defineEndpoint, defineRawEndpoint } from '../../endpoint.ts';
 import { AppError } from '../../errors.ts';
-import { mayReadRuleDrafts } from '../../policy.ts';
+import { mayReadRuleDrafts, ruleTriers, ruleWriters, type Actor } from '../../policy.ts';
 import { changeRuleDraft, discardRuleDraft, enactRuleVersion } from './change-rule-draft.ts';
 import { createRuleVersion } from './create-rule-version.ts';
 import { readRuleCalendar } from './find-rule-in-force.ts';
@@ -37,7 +37,10 @@ export const rulesEndpoints = [
         populate: [...who],
       });
       const seen = versions.filter((one) => isStaff || !isToCome(stateOfVersion(one, calendar)));
-      return { rows: seen.map((one) => presentRuleVersion(one, calendar, { withNames: isStaff })) };
+      return {
+        rows: seen.map((one) => presentRuleVersion(one, calendar, actor)),
+        mayWrite: ruleWriters.some((role) => role === actor?.role),
+      };
     },
   }),
   defineEndpoint({
@@ -54,39 +57,39 @@ export const rulesEndpoints = [
       if (version === null || (isToCome(stateOfVersion(version, calendar)) && !isStaff)) {
         throw new AppError('NOT_FOUND');
       }
-      return presentRuleVersion(version, calendar, { withNames: isStaff });
+      return presentRuleVersion(version, calendar, actor);
     },
   }),
   defineEndpoint({
     method: 'post',
     path: '/api/rules',
     summary: 'Writes the next version of the rule, in force from a day; earlier ones stay.',
-    access: ['administrator'],
+    access: ruleWriters,
     isRepeatable: true,
     body: createRuleVersionInputSchema,
     status: 201,
     response: ruleVersionSchema,
     handler: async ({ em, actor, body }) => {
       const { today } = await readRuleCalendar(em);
-      return presentToStaff(em, await createRuleVersion(em, actor, body, today));
+      return present(em, actor, await createRuleVersion(em, actor, body, today));
     },
   }),
   defineEndpoint({
     method: 'put',
     path: '/api/rules/:id',
     summary: 'Writes a version anew that has not come into force.',
-    access: ['administrator'],
+    access: ruleWriters,
     params: ruleParams,
     body: changeRuleDraftInputSchema,
     response: ruleVersionSchema,
     handler: async ({ em, actor, params, body }) =>
-      presentToStaff(em, await changeRuleDraft(em, actor, params.id, body)),
+      present(em, actor, await changeRuleDraft(em, actor, params.id, body)),
   }),
   defineEmptyEndpoint({
     method: 'delete',
     path: '/api/rules/:id',
     summary: 'Throws a version away that has not come into force.',
-    access: ['administrator'],
+    access: ruleWriters,
     params: ruleParams,
     query: discardRuleDraftQuerySchema,
     handler: ({ em, params, query }) => discardRuleDraft(em, params.id, query.seen),
@@ -95,19 +98,19 @@ export const rulesEndpoints = [
     method: 'post',
     path: '/api/rules/:id/enactment',
     summary: 'Sets the day from which a version holds, or takes it back before it has come.',
-    access: ['administrator'],
+    access: ruleWriters,
     params: ruleParams,
     body: enactRuleVersionInputSchema,
     response: ruleVersionSchema,
     handler: async ({ em, actor, params, body }) =>
-      presentToStaff(em, await enactRuleVersion(em, actor, params.id, body)),
+      present(em, actor, await enactRuleVersion(em, actor, params.id, body)),
   }),
   defineRawEndpoint({
     method: 'post',
     path: '/api/rules/trials',
     summary:
       'Judges the case of a finished study by a rule beside the version in force and stores nothing: lines of JSON with the progress, then the result.',
-    access: ['administrator', 'planner'],
+    access: ruleTriers,
     limit: 'heavy',
     body: tryRuleInputSchema,
     produces: 'application/x-ndjson',
@@ -121,6 +124,6 @@ function isToCome(state: ReturnType<typeof stateOfVersion>): boolean {
   return state === 'draft' || state === 'scheduled';
 }
 
-async function presentToStaff(em: EntityManager, version: RuleVersion) {
-  return presentRuleVersion(version, await readRuleCalendar(em), { withNames: true });
+async function present(em: EntityManager, actor: Actor, version: RuleVersion) {
+  return presentRuleVersion(version, await readRuleCalendar(em), actor);
 }

@@ -71,6 +71,13 @@ function Application({ reviewCase }: { reviewCase: CaseDetail }) {
             </Link>
           </p>
         ) : null}
+        {reviewCase.latestStudy?.status === 'finished' ? (
+          <p>
+            <Link to={paths.caseFindings.href(reference)} className="link">
+              What the rule says of your proposal
+            </Link>
+          </p>
+        ) : null}
       </div>
       {reviewCase.correction === null ? null : (
         <CorrectionNotice correction={reviewCase.correction} />

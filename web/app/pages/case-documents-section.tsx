@@ -1,9 +1,11 @@
+import { Link } from 'react-router-dom';
 import type { CaseDetail } from '../../../shared/contracts/cases.ts';
 import { EmptyState } from '../../components/empty-state.tsx';
 import { QueryView } from '../../components/query-view.tsx';
 import { useReports } from '../../features/reports/api/list-reports.ts';
 import { ReportList } from '../../features/reports/components/report-list.tsx';
 import { useStudy } from '../../features/studies/api/get-study.ts';
+import { paths } from '../paths.ts';
 
 /** What can be taken home: the staff reports, and the study to recompute. */
 export function CaseDocumentsSection({ reviewCase }: { reviewCase: CaseDetail }) {
@@ -25,16 +27,22 @@ export function CaseDocumentsSection({ reviewCase }: { reviewCase: CaseDetail })
             )
           }
         </QueryView>
-        {finished === null ? null : <StudyDownloads studyId={finished.id} />}
+        {finished === null ? null : <StudyDownloads reference={reference} studyId={finished.id} />}
       </div>
     </section>
   );
 }
 
-function StudyDownloads({ studyId }: { studyId: string }) {
+function StudyDownloads({ reference, studyId }: { reference: string; studyId: string }) {
   const study = useStudy(studyId);
   return (
     <div className="grid gap-1">
+      <p>
+        <Link to={paths.caseFindings.href(reference)} className="link">
+          What the rule says, place by place
+        </Link>
+        : every finding, to sort and to search.
+      </p>
       <p>
         <a href={`/api/studies/${studyId}/evidence`} className="link">
           Evidence file of the study

@@ -1,38 +1,37 @@
-import { useId } from 'react';
-import type { RuleVersion } from '../../../../shared/contracts/rules.ts';
+import { sayClause } from '../../../../shared/rules/clause-sentence.ts';
+import type { Rule } from '../../../../shared/rules/rule-schema.ts';
 import { DefinitionList } from '../../../components/definition-list.tsx';
 import { useFormats } from '../../../lib/place-context.ts';
-import { describeClause } from '../clause-in-words.ts';
+import { clauseFigures, describeClause } from '../clause-in-words.ts';
+import { CountedInstants } from './counted-instants.tsx';
 
-const stateWords = {
-  draft: 'draft',
-  scheduled: 'in force',
-  'in-force': 'in force',
-  retired: 'no longer in force',
-} as const satisfies Record<RuleVersion['state'], string>;
-
-/** One version of the rule in plain words, with the data that says the same. */
-export function RuleVersionView({ version }: { version: RuleVersion }) {
+/** A rule in plain words, with its calendar and the data that says the same. */
+export function RuleVersionView({ rule }: { rule: Rule }) {
   const formats = useFormats();
-  const headingId = useId();
-  const { rule, state, inForceFrom } = version;
   return (
-    <section className="grid gap-4 border-t border-ink pt-5" aria-labelledby={headingId}>
-      <div>
-        <h2 id={headingId}>
-          {rule.title}, version {rule.version}
-        </h2>
-        <p className="text-ink-soft">
-          {rule.citation === '' ? '' : `${rule.citation} · `}
-          {stateWords[state]}
-          {inForceFrom === null ? '' : ` from ${formats.date(inForceFrom)}`}
-        </p>
-      </div>
+    <div className="grid gap-6">
       {rule.clauses.map((clause) => (
-        <div key={clause.id} className="measure grid gap-2">
-          <h3>{clause.title}</h3>
-          <DefinitionList entries={describeClause(clause, formats)} className="text-small" />
-        </div>
+        <section key={clause.id} className="grid gap-3 border-t border-hairline pt-4">
+          <h3 className="text-lead">{clause.title}</h3>
+          <p className="say measure">{sayClause(clause, clauseFigures(formats))}</p>
+          <details>
+            <summary className="min-h-6 cursor-pointer">
+              Point by point, and which days and instants count
+            </summary>
+            <div className="mt-3 grid gap-x-10 gap-y-6 lg:grid-cols-2">
+              <DefinitionList
+                entries={describeClause(clause, formats)}
+                className="self-start text-small"
+              />
+              <CountedInstants
+                days={clause.days}
+                window={clause.window}
+                minimumAltitude={clause.minimumAltitude}
+                step={clause.step}
+              />
+            </div>
+          </details>
+        </section>
       ))}
       <p className="measure text-small">
         A loss is called{' '}
@@ -40,10 +39,13 @@ export function RuleVersionView({ version }: { version: RuleVersion }) {
       </p>
       <details>
         <summary className="min-h-6 cursor-pointer">The same as data (JSON)</summary>
-        <pre className="mt-2 overflow-x-auto border border-hairline bg-sheet p-3 font-mono text-[0.8125rem]">
+        <pre
+          className="mt-2 overflow-x-auto border border-hairline bg-sheet p-3 font-mono text-[0.8125rem]"
+          tabIndex={0}
+        >
           {JSON.stringify(rule, null, 2)}
         </pre>
       </details>
-    </section>
+    </div>
   );
 }

@@ -7,6 +7,7 @@ export interface ListFindingsFilter {
   sort?: string;
   finding?: ListFindingsQuery['finding'];
   clause?: ListFindingsQuery['clause'];
+  class?: ListFindingsQuery['class'];
   page?: number;
   pageSize?: number;
 }

@@ -12,16 +12,18 @@ export interface FindingsTableProps {
   onSort: (sort: string) => void;
   /** Where a receptor is shown on the map on its judged day. */
   hrefOf: (row: FindingRow) => string;
+  /** Opens the sun ledger of a receptor. */
+  onLedger: (receptor: string) => void;
 }
 
 /** Every receptor under every clause: what it had, what it keeps, what the rule allows. */
-export function FindingsTable({ rows, sort, onSort, hrefOf }: FindingsTableProps) {
+export function FindingsTable({ rows, sort, onSort, hrefOf, onLedger }: FindingsTableProps) {
   const formats = useFormats();
   return (
     <DataTable
       caption="Findings"
       hideCaption
-      columns={findingColumns(formats, hrefOf)}
+      columns={findingColumns(formats, hrefOf, onLedger)}
       rows={rows}
       rowKey={(row) => `${row.receptor} ${row.clause} ${row.day ?? ''}`}
       sort={sort}
@@ -33,8 +35,9 @@ export function FindingsTable({ rows, sort, onSort, hrefOf }: FindingsTableProps
 function findingColumns(
   formats: Formats,
   hrefOf: (row: FindingRow) => string,
+  onLedger: (receptor: string) => void,
 ): TableColumn<FindingRow>[] {
-  const figure = (id: 'before' | 'after' | 'lost' | 'margin', header: string) => ({
+  const figure = (id: 'before' | 'after' | 'lost' | 'limit' | 'margin', header: string) => ({
     id,
     header,
     sortKey: id,
@@ -48,16 +51,7 @@ function findingColumns(
       sortKey: 'label',
       isRowHeader: true,
       className: 'min-w-40',
-      cell: (row) => (
-        <>
-          <Link to={hrefOf(row)} className="link">
-            {row.label}
-          </Link>
-          <span className="block text-label text-ink-soft">
-            {wordOfClass(row.class)} {row.receptor}
-          </span>
-        </>
-      ),
+      cell: (row) => <ReceptorCell row={row} href={hrefOf(row)} onLedger={onLedger} />,
     },
     {
       id: 'finding',
@@ -69,12 +63,7 @@ function findingColumns(
     figure('before', 'Before'),
     figure('after', 'After'),
     figure('lost', 'Lost'),
-    {
-      id: 'limit',
-      header: 'Limit',
-      align: 'end',
-      cell: (row) => formats.inUnit(row.limit, row.unit),
-    },
+    figure('limit', 'Limit'),
     figure('margin', 'Margin'),
     {
       id: 'clause',
@@ -86,6 +75,9 @@ function findingColumns(
           {row.clauseTitle}
           <span className="block text-label text-ink-soft">
             {row.day === null ? 'over its days together' : formats.date(row.day)}
+            {typeof row.daysNotMet === 'number'
+              ? `, the worst; ${row.daysNotMet} ${row.daysNotMet === 1 ? 'day' : 'days'} not met`
+              : ''}
           </span>
         </>
       ),
@@ -97,4 +89,43 @@ function findingColumns(
       cell: (row) => row.sentence,
     },
   ];
+}
+
+interface ReceptorCellProps {
+  row: FindingRow;
+  href: string;
+  onLedger: (receptor: string) => void;
+}
+
+/** A ring is no place of the map's and has no ledger; every other receptor has both. */
+function ReceptorCell({ row, href, onLedger }: ReceptorCellProps) {
+  const kind = (
+    <span className="block text-label text-ink-soft">
+      {wordOfClass(row.class)} {row.receptor}
+    </span>
+  );
+  if (row.class === 'ring') {
+    return (
+      <>
+        {row.label}
+        {kind}
+      </>
+    );
+  }
+  return (
+    <>
+      <Link to={href} className="link">
+        {row.label}
+      </Link>
+      {kind}
+      <button
+        type="button"
+        className="link no-print min-h-6"
+        aria-label={`Sun ledger of ${row.label}`}
+        onClick={() => onLedger(row.receptor)}
+      >
+        Sun ledger
+      </button>
+    </>
+  );
 }

@@ -1,7 +1,7 @@
 export interface StudyDownloadsProps {
   studyId: string;
   /** The filters of the findings table, for files of the same rows. */
-  filter?: Partial<Record<'q' | 'finding' | 'clause' | 'sort', string>>;
+  filter?: Partial<Record<'q' | 'finding' | 'clause' | 'class' | 'sort', string>>;
 }
 
 /** The study's figures, and the file with which anyone can recompute it. */
