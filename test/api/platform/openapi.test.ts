@@ -162,7 +162,7 @@ describe('the schemas of the document', () => {
     for (const { operation } of operationsOf(document)) {
       for (const { content = {} } of Object.values(operation.responses)) {
         for (const [type, { schema }] of Object.entries(content)) {
-          if (/json$/.test(type)) expect(schema['type']).not.toBe('string');
+          if (/[/+]json$/.test(type)) expect(schema['type']).not.toBe('string');
         }
       }
     }

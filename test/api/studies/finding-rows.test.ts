@@ -148,7 +148,7 @@ describe('the findings table as CSV', () => {
   );
 
   it('writes numbers as numbers, negative ones too, and leaves what is missing empty', () => {
-    expect(cellsOf({ margin: -1.5, loss: null, band: null })).toMatch(/,2,-1\.5,,,It is met\.$/);
+    expect(cellsOf({ margin: -1.5, loss: null, band: null })).toMatch(/,2,-1\.5,,,,,It is met\.$/);
   });
 
   it('ends every line with CRLF', () => {
