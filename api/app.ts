@@ -5,6 +5,7 @@ import { endpoints } from './endpoints.ts';
 import { errorHandler, notFoundHandler } from './middleware/error-handler.ts';
 import { jsonBody } from './middleware/json-body.ts';
 import { originCheck } from './middleware/origin-check.ts';
+import { packed } from './middleware/packed.ts';
 import { requestLog } from './middleware/request-log.ts';
 import { securityHeaders } from './middleware/security-headers.ts';
 import { sessions } from './middleware/session.ts';
@@ -23,6 +24,7 @@ export function createApp(deps: AppDeps): Express {
 
   app.use(requestLog(deps.logger));
   app.use(securityHeaders(env.PUBLIC_URL));
+  app.use(packed());
   app.use(
     '/api',
     originCheck(env.PUBLIC_URL),

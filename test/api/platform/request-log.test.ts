@@ -13,7 +13,8 @@ let lines: string[] = [];
 
 beforeAll(async () => {
   const logger = createLogger({ LOG_LEVEL: 'trace' }, { write: (line) => lines.push(line) });
-  api = await startTestApi({ logger });
+  // No client is built here, whatever the checkout holds.
+  api = await startTestApi({ logger, variables: { WEB_DIST: '/nowhere' } });
   await buildSmallCity(api.orm);
   reader = await api.signIn('public');
 });

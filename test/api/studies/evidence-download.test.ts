@@ -45,7 +45,7 @@ const readFile = () => recordSchema.parse(JSON.parse(text));
 
 describe('the evidence file', () => {
   it('comes as JSON to be saved, for its reader alone, and is asked for again by its tag', async () => {
-    const { headers } = await planner.get(address).expect(200);
+    const { headers } = await planner.get(address).set('Accept-Encoding', 'identity').expect(200);
     expect(headers['content-type']).toBe('application/json; charset=utf-8');
     expect(headers['content-disposition']).toMatch(/^attachment; filename=\S+-r1\.study\.json$/);
     expect(headers['cache-control']).toBe('private, no-cache');
