@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import {
   abilitiesOnCase,
+  abilitiesOnRule,
   mayOnCase,
   mayReadRuleDrafts,
   mayTransition,
@@ -138,5 +139,33 @@ describe('a version of the rule that is not in force', () => {
     ['administrator', true],
   ] as const)('is open to %s: %s', (role, isOpen) => {
     expect(mayReadRuleDrafts(role === null ? null : { id: strangerId, role })).toBe(isOpen);
+  });
+});
+
+describe('the policy of the rule', () => {
+  const kept = ['in-force', 'retired'] as const;
+  const toCome = ['draft', 'scheduled'] as const;
+  const actorOf = (role: 'administrator' | 'planner' | 'board' | 'applicant') => ({
+    id: strangerId,
+    role,
+  });
+
+  it('lets an administrator work on what has not come into force, and copy what has', () => {
+    const administrator = actorOf('administrator');
+    for (const state of toCome) {
+      expect(abilitiesOnRule(administrator, state)).toEqual(['copy', 'change', 'enact', 'try']);
+    }
+    for (const state of kept) {
+      expect(abilitiesOnRule(administrator, state)).toEqual(['copy', 'try']);
+    }
+  });
+
+  it('lets a planner try it, and everybody else read', () => {
+    for (const state of [...toCome, ...kept]) {
+      expect(abilitiesOnRule(actorOf('planner'), state)).toEqual(['try']);
+      for (const actor of [actorOf('board'), actorOf('applicant'), null]) {
+        expect(abilitiesOnRule(actor, state)).toEqual([]);
+      }
+    }
   });
 });

@@ -128,8 +128,11 @@ export const studyEndpoints = [
     access: 'anybody',
     params: studyParams,
     response: findingsSummarySchema,
-    handler: async ({ em, actor, params }) =>
-      summariseFindings(await getFinishedStudy(em, actor, params.id, ['findingRows'])),
+    handler: async ({ em, actor, params }) => {
+      const study = await getFinishedStudy(em, actor, params.id, ['findingRows']);
+      const { findings, findingRows, ruleVersion } = study;
+      return summariseFindings({ findings, findingRows, rule: ruleVersion.rule });
+    },
   }),
   defineRawEndpoint({
     method: 'get',

@@ -4,6 +4,7 @@ import {
   type FindingRow,
   type FindingsSummary,
 } from '../../../shared/contracts/studies.ts';
+import type { Rule } from '../../../shared/rules/rule-schema.ts';
 import type { Finding } from '../../../shared/study/evidence-schema.ts';
 import type { Study } from './study.entity.ts';
 
@@ -11,15 +12,15 @@ import type { Study } from './study.entity.ts';
 export function summariseFindings({
   findings,
   findingRows,
-  ruleVersion,
-}: Pick<Study, 'findings' | 'findingRows' | 'ruleVersion'>): FindingsSummary {
+  rule,
+}: Pick<Study, 'findings' | 'findingRows'> & { rule: Rule }): FindingsSummary {
   const all = findingRows ?? [];
   const clauses = (findings?.clauses ?? []).map(({ clause, finding }): ClauseSummary => {
     const rows = all.filter((row) => row.clause === clause);
     const count = (wanted: Finding) => rows.filter((row) => row.finding === wanted).length;
     return {
       clause,
-      title: ruleVersion.rule.clauses.find(({ id }) => id === clause)?.title ?? clause,
+      title: rule.clauses.find(({ id }) => id === clause)?.title ?? clause,
       finding,
       judged: rows.length,
       notMet: count('not-met'),

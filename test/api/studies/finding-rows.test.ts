@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { listFindingRows } from '../../../api/modules/studies/list-finding-rows.ts';
 import { renderFindingsCsv } from '../../../api/modules/studies/render-findings-csv.ts';
 import { selectFindingRows } from '../../../api/modules/studies/select-finding-rows.ts';
+import { summariseFindings } from '../../../api/modules/studies/summarise-findings.ts';
 import type { FindingRow } from '../../../shared/contracts/studies.ts';
 import { evidenceFileSchema } from '../../../shared/study/evidence-schema.ts';
 import type { ClauseResult, EvidenceFile } from '../../../shared/study/evidence-schema.ts';
@@ -130,6 +131,88 @@ describe('the findings table', () => {
   });
 });
 
+describe('the findings table, narrowed and sorted', () => {
+  const rows = [
+    makeRow({ receptor: 'a', class: 'yard', limit: 3, sentence: 'The yard of a loses sun.' }),
+    makeRow({ receptor: 'b', class: 'ring', limit: 1, clauseTitle: 'Bands beyond the boundary' }),
+    makeRow({ receptor: 'c', class: 'yard', limit: 40, unit: 'm²' }),
+  ];
+  const receptorsOf = (query: Parameters<typeof selectFindingRows>[1]) =>
+    selectFindingRows(rows, query).map(({ receptor }) => receptor);
+
+  it('has the receptors of one class alone', () => {
+    expect(receptorsOf({ class: 'yard' })).toEqual(['a', 'c']);
+    expect(receptorsOf({ class: 'window' })).toEqual([]);
+  });
+
+  it.each([
+    ['YARD OF A', ['a']],
+    ['beyond the boundary', ['b']],
+    ['moderate', ['a', 'b', 'c']],
+    ['nowhere', []],
+  ])('is searched through sentences, clauses and bands for %j', (q, found) => {
+    expect(receptorsOf({ q, sort: 'receptor' })).toEqual(found);
+  });
+
+  it('keeps hours apart from square metres when it is sorted by a figure', () => {
+    expect(receptorsOf({ sort: 'limit' })).toEqual(['b', 'a', 'c']);
+    expect(receptorsOf({ sort: '-limit' })).toEqual(['c', 'a', 'b']);
+  });
+});
+
+describe('the findings summed up', () => {
+  const summarise = (rows: FindingRow[], finding: 'met' | 'not-met' | 'no-receptor') =>
+    summariseFindings({
+      findings: {
+        met: finding !== 'not-met',
+        lossIndex: 0,
+        clauses: [{ clause: 'winter-noon-hours', finding, receptorsNotMet: [] }],
+      },
+      findingRows: rows,
+      rule: smallCityRule(),
+    });
+
+  it('count each finding of a clause, and name the worst that is not met', () => {
+    const rows = [
+      makeRow({ receptor: 'a', finding: 'not-met', margin: -0.2 }),
+      makeRow({ receptor: 'b', finding: 'not-met', margin: -1, label: '2 Test Row', close: true }),
+      makeRow({ receptor: 'c', finding: 'disregarded', margin: -3 }),
+      makeRow({ receptor: 'd', finding: 'met' }),
+      makeRow({ receptor: 'e', finding: 'not-affected', class: 'yard' }),
+    ];
+    expect(summarise(rows, 'not-met')).toEqual({
+      classes: ['parcel', 'yard'],
+      clauses: [
+        {
+          clause: 'winter-noon-hours',
+          title: 'Two hours of midwinter sun',
+          finding: 'not-met',
+          judged: 5,
+          notMet: 2,
+          met: 1,
+          disregarded: 1,
+          notAffected: 1,
+          close: 1,
+          worst: { receptor: 'b', label: '2 Test Row', margin: -1, unit: 'h' },
+        },
+      ],
+    });
+  });
+
+  it('name no worst where margins have several units, or nothing is affected', () => {
+    const mixed = [makeRow({}), makeRow({ unit: 'm²' })];
+    expect(summarise(mixed, 'met').clauses[0]?.worst).toBeNull();
+    const untouched = [makeRow({ finding: 'not-affected' })];
+    expect(summarise(untouched, 'met').clauses[0]?.worst).toBeNull();
+  });
+
+  it('say of a clause without any receptor that there is none', () => {
+    expect(summarise([], 'no-receptor').clauses).toMatchObject([
+      { finding: 'no-receptor', judged: 0, worst: null },
+    ]);
+  });
+});
+
 describe('the findings table as CSV', () => {
   const cellsOf = (change: Partial<FindingRow>) =>
     renderFindingsCsv([makeRow(change)]).split('\r\n')[1];
@@ -146,6 +229,10 @@ describe('the findings table as CSV', () => {
       expect(cellsOf({ label })).toContain(`'${label}`);
     },
   );
+
+  it('writes the days of a season that fail, and how finely points lie', () => {
+    expect(cellsOf({ daysNotMet: 12, spacingM: 0.5 })).toMatch(/,moderate,12,0\.5,It is met\.$/);
+  });
 
   it('writes numbers as numbers, negative ones too, and leaves what is missing empty', () => {
     expect(cellsOf({ margin: -1.5, loss: null, band: null })).toMatch(/,2,-1\.5,,,,,It is met\.$/);

@@ -1,4 +1,5 @@
 import { useState } from 'react';
+import { Button } from 'react-aria-components/Button';
 import { ComboBox } from 'react-aria-components/ComboBox';
 import { Input } from 'react-aria-components/Input';
 import { ListBox, ListBoxItem } from 'react-aria-components/ListBox';
@@ -17,6 +18,7 @@ export interface CasePickerProps {
 /** Finds a case with a finished study by its number, its title or its address. */
 export function CasePicker({ cases, isLoading, onSearch, onPick }: CasePickerProps) {
   const [text, setText] = useState('');
+  const [picked, setPicked] = useState<string | null>(null);
   const ready = cases.filter(({ latestStudy }) => latestStudy?.status === 'finished');
   return (
     <ComboBox
@@ -25,22 +27,31 @@ export function CasePicker({ cases, isLoading, onSearch, onPick }: CasePickerPro
       inputValue={text}
       onInputChange={(next) => {
         setText(next);
-        onSearch(next.trim());
+        // The name of a case that is picked is no search for another.
+        if (!ready.some((one) => nameOf(one) === next)) onSearch(next.trim());
       }}
+      value={picked}
       onChange={(key) => {
-        const picked = ready.find(({ reference }) => reference === key);
-        if (picked === undefined) return;
-        setText('');
-        onSearch('');
-        onPick(picked);
+        const found = ready.find(({ reference }) => reference === key);
+        setPicked(found?.reference ?? null);
+        if (found === undefined) return;
+        setText(nameOf(found));
+        onPick(found);
       }}
-      value={null}
       allowsEmptyCollection
-      menuTrigger="focus"
+      menuTrigger="input"
     >
       <FieldLabel>Case</FieldLabel>
       <FieldDescription>By number, title or address; those with a finished study.</FieldDescription>
-      <Input className={inputClass} autoComplete="off" />
+      <div className="flex">
+        <Input className={inputClass} autoComplete="off" />
+        <Button
+          className="-ms-px min-w-10 cursor-pointer border border-ink"
+          aria-label="Show the cases"
+        >
+          <span aria-hidden="true">▾</span>
+        </Button>
+      </div>
       <Popover className="w-(--trigger-width) border border-ink bg-sheet">
         <ListBox<CaseSummary & { id: string }>
           className="max-h-80 overflow-auto py-1"
@@ -53,10 +64,10 @@ export function CasePicker({ cases, isLoading, onSearch, onPick }: CasePickerPro
           {(one) => (
             <ListBoxItem
               id={one.id}
-              textValue={`${one.reference} ${one.title}`}
+              textValue={nameOf(one)}
               className="group cursor-pointer px-3 py-1.5 data-focused:bg-ink data-focused:text-paper"
             >
-              {one.reference} {one.title}{' '}
+              {nameOf(one)}{' '}
               <span className="text-small text-ink-soft group-data-focused:text-paper">
                 {one.address}
               </span>
@@ -66,4 +77,8 @@ export function CasePicker({ cases, isLoading, onSearch, onPick }: CasePickerPro
       </Popover>
     </ComboBox>
   );
+}
+
+function nameOf({ reference, title }: CaseSummary): string {
+  return `${reference} ${title}`;
 }

@@ -1,4 +1,4 @@
-import { useId, useRef } from 'react';
+import { useId } from 'react';
 import { sayClause } from '../../../../shared/rules/clause-sentence.ts';
 import { Button } from '../../../components/button.tsx';
 import { useFormats } from '../../../lib/place-context.ts';
@@ -28,13 +28,14 @@ export function ClauseCard(props: ClauseCardProps) {
   const { clause, position, clauseCount, isOpen, problemCount, onChange, problemAt } = props;
   const formats = useFormats();
   const id = useId();
-  const heading = useRef<HTMLHeadingElement>(null);
   const unfinished = unfinishedClause(clause);
   const name = `clause ${position}`;
+  const sentence = sayClause(unfinished, clauseFigures(formats));
+  const live = isOpen ? 'polite' : 'off';
   return (
     <li className="grid gap-3 border-t border-ink pt-4" aria-labelledby={id}>
       <div className="flex flex-wrap items-baseline gap-x-5 gap-y-1">
-        <h3 id={id} ref={heading} className="grow text-lead">
+        <h3 id={id} className="grow text-lead">
           {position}. {clause.title.trim() === '' ? 'New clause' : clause.title}
         </h3>
         <div className="no-print flex flex-wrap gap-x-4 gap-y-1">
@@ -70,8 +71,8 @@ export function ClauseCard(props: ClauseCardProps) {
           </Button>
         </div>
       </div>
-      <p className="say measure" aria-live={isOpen ? 'polite' : 'off'}>
-        {sayClause(unfinished, clauseFigures(formats))}
+      <p className={`say measure ${isOpen ? 'lg:hidden' : ''}`} aria-live={live}>
+        {sentence}
       </p>
       {clause.source === null ? null : (
         <p className="measure text-small">
@@ -88,9 +89,13 @@ export function ClauseCard(props: ClauseCardProps) {
         </p>
       )}
       {isOpen ? (
-        <div className="grid gap-x-10 gap-y-6 lg:grid-cols-[minmax(0,6fr)_minmax(0,5fr)]">
+        <div className="grid gap-x-10 gap-y-6 lg:grid-cols-[minmax(0,6fr)_minmax(0,5fr)] [&>*]:min-w-0">
           <ClauseFields clause={clause} onChange={onChange} problemAt={problemAt} />
-          <div className="lg:sticky lg:top-4 lg:self-start">
+          <div className="grid gap-5 lg:sticky lg:top-4 lg:self-start">
+            {/* Beside the fields it stays in sight; on a narrow screen it stands above them. */}
+            <p className="say hidden lg:block" aria-live={live}>
+              {sentence}
+            </p>
             <CountedInstants
               days={clause.days}
               window={unfinished.window}

@@ -21,7 +21,6 @@ export function DayStrip({ day, minimumAltitudeDeg }: DayStripProps) {
     ({ atMs, altitudeDeg }) => `${x(atMs).toFixed(1)},${y(altitudeDeg).toFixed(1)}`,
   );
   const hours = [0, 6, 12, 18, 24];
-  const hourMs = (hour: number) => startMs + (hour / 24) * (endMs - startMs);
   return (
     <figure className="keep-together grid gap-1">
       <svg
@@ -85,7 +84,7 @@ export function DayStrip({ day, minimumAltitudeDeg }: DayStripProps) {
       </svg>
       <div className="flex justify-between text-label text-ink-soft" aria-hidden="true">
         {hours.map((hour) => (
-          <span key={hour}>{formats.clock(new Date(hourMs(hour)).toISOString())}</span>
+          <span key={hour}>{formats.civil.hour(hour)}</span>
         ))}
       </div>
     </figure>

@@ -18,7 +18,7 @@ export function RuleVersionView({ rule }: { rule: Rule }) {
             <summary className="min-h-6 cursor-pointer">
               Point by point, and which days and instants count
             </summary>
-            <div className="mt-3 grid gap-x-10 gap-y-6 lg:grid-cols-2">
+            <div className="mt-3 grid gap-x-10 gap-y-6 lg:grid-cols-2 [&>*]:min-w-0">
               <DefinitionList
                 entries={describeClause(clause, formats)}
                 className="self-start text-small"

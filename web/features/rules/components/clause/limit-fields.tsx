@@ -39,7 +39,7 @@ export function LimitFields({
   const joint: LimitJoint = 'anyOf' in limit ? 'anyOf' : 'allOf' in limit ? 'allOf' : 'one';
   return (
     <div className="grid gap-3">
-      {depth >= deepest ? null : (
+      {depth > 0 && !isGroup(limit) ? null : (
         <SelectField
           label={name === '' ? 'How many requirements' : `Requirement ${name}: of how many`}
           options={joints}
@@ -62,16 +62,33 @@ export function LimitFields({
                   onChange={(next) => onChange(combine(joint, members.with(index, next)))}
                   problemAt={(path) => problemAt(`.${joint}.${index}${path}`)}
                 />
-                {members.length < 2 ? null : (
-                  <Button
-                    kind="plain"
-                    className="justify-self-start"
-                    aria-label={`Remove requirement ${memberName}`}
-                    onPress={() => onChange(combine(joint, members.toSpliced(index, 1)))}
-                  >
-                    Remove this requirement
-                  </Button>
-                )}
+                <div className="flex flex-wrap gap-x-5">
+                  {members.length < 2 ? null : (
+                    <Button
+                      kind="plain"
+                      aria-label={`Remove requirement ${memberName}`}
+                      onPress={() => onChange(combine(joint, members.toSpliced(index, 1)))}
+                    >
+                      Remove this requirement
+                    </Button>
+                  )}
+                  {isGroup(member) || depth + 1 >= deepest ? null : (
+                    <Button
+                      kind="plain"
+                      aria-label={`Make several of requirement ${memberName}`}
+                      onPress={() =>
+                        onChange(
+                          combine(
+                            joint,
+                            members.with(index, combine(otherJoint(joint), [member, member])),
+                          ),
+                        )
+                      }
+                    >
+                      Make several of it
+                    </Button>
+                  )}
+                </div>
               </div>
             );
           })}
@@ -94,4 +111,9 @@ export function LimitFields({
       )}
     </div>
   );
+}
+
+/** Within "any of" a group asks for all, and the other way round: else it would say nothing new. */
+function otherJoint(joint: LimitJoint): LimitJoint {
+  return joint === 'anyOf' ? 'allOf' : 'anyOf';
 }
