@@ -92,7 +92,10 @@ describe('an administrator', () => {
     await page.getByText('Choose by which clock the hours are meant.').first().waitFor();
     await choose(/By which clock are the hours meant\?$/, 'Standard time all year');
     await choose(/\bWhich$/, 'June solstice');
-    await page.getByText('On the June solstice, from 09:00 to 15:00, standard time').waitFor();
+    await page
+      .getByText('On the June solstice, from 09:00 to 15:00, standard time')
+      .filter({ visible: true })
+      .waitFor();
     await look('own-clause');
     await page.getByRole('button', { name: 'Remove clause 3' }).click();
     await page.getByRole('button', { name: 'Put it back' }).waitFor();
@@ -115,6 +118,7 @@ describe('an administrator', () => {
     await page
       .getByRole('table', { name: 'Clause by clause' })
       .getByText('has no such clause')
+      .first()
       .waitFor();
     await look('trial');
   });

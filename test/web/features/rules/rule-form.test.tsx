@@ -80,7 +80,7 @@ describe('the form of a rule', () => {
     press('Save');
     expect(onSubmit).not.toHaveBeenCalled();
     expect(screen.getByRole('alert').textContent).toContain(
-      'Clause 1 (Noon hours): The window ends before it begins.',
+      'Clause 1 (Noon hours), hours: The window ends before it begins.',
     );
   });
 

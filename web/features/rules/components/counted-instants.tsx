@@ -66,7 +66,11 @@ export function CountedInstants(props: CountedInstantsProps) {
         </div>
       )}
       {day === null ? (
-        <p className="text-small">Choose the clock and the hours to see which instants count.</p>
+        <p className="text-small">
+          {window === null
+            ? 'Choose the clock and the hours to see which instants count.'
+            : 'Correct the hours and the minutes between instants to see which count.'}
+        </p>
       ) : (
         <>
           <DayStrip day={day} minimumAltitudeDeg={minimumAltitude} />

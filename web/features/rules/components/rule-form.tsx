@@ -11,6 +11,7 @@ import { draftOfRule, ruleOfDraft, type RuleDraft } from '../rule-draft.ts';
 import { problemsOfError, readRule, type RuleProblems } from '../rule-problems.ts';
 import { BandsFields } from './bands-fields.tsx';
 import { ClauseList } from './clause-list.tsx';
+import { ProblemList } from './problem-list.tsx';
 import { RuleJson } from './rule-json.tsx';
 
 export interface RuleFormProps {
@@ -124,39 +125,4 @@ function useRefusals(error: unknown, written: string): RuleProblems {
   if (error !== seen.error) setSeen({ error, written });
   const isStanding = error === seen.error && written === seen.written;
   return isApiError(error, 'INPUT_INVALID') && isStanding ? problemsOfError(error) : noProblems;
-}
-
-interface ProblemListProps {
-  problems: RuleProblems;
-  clauses: RuleDraft['clauses'];
-}
-
-/** Everything that is to be corrected, with the clause in which it stands. */
-function ProblemList({ problems, clauses }: ProblemListProps) {
-  const whereOf = (path: string) => {
-    const index = /^clauses\.(\d+)/.exec(path)?.[1];
-    if (index === undefined) return '';
-    const title = clauses[Number(index)]?.title ?? '';
-    return `Clause ${Number(index) + 1}${title === '' ? '' : ` (${title})`}: `;
-  };
-  return (
-    <div role="alert" className="border-s-3 border-madder py-1 ps-3.5">
-      <p className="font-strong">
-        <span className="text-madder" aria-hidden="true">
-          ✕{' '}
-        </span>
-        {problems.size === 1
-          ? 'One thing is to be corrected.'
-          : `${problems.size} things are to be corrected.`}
-      </p>
-      <ul className="list-disc ps-5 text-small">
-        {[...problems].map(([path, message]) => (
-          <li key={path}>
-            {whereOf(path)}
-            {message}
-          </li>
-        ))}
-      </ul>
-    </div>
-  );
 }

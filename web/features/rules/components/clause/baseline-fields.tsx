@@ -24,7 +24,7 @@ export function BaselineFields({ clause, onChange, problemAt }: ClausePartProps)
   const wall = typeof baseline === 'object' ? baseline : null;
   return (
     <FieldGroup legend="Compared with what">
-      <div className="grid gap-3 sm:grid-cols-[minmax(0,3fr)_minmax(0,2fr)]">
+      <div className="grid items-start gap-3 sm:grid-cols-[minmax(0,3fr)_minmax(0,2fr)]">
         <SelectField
           label="Before is"
           options={choices}

@@ -43,7 +43,7 @@ export function ClauseFields(props: ClausePartProps) {
         legend="What is let pass"
         description="A place on which the new shadow covers no more than this area, or more of it for no longer than this on a day, is reported and not held against the proposal."
       >
-        <div className="grid gap-3 sm:grid-cols-2">
+        <div className="grid items-start gap-3 sm:grid-cols-2">
           <NumberField
             label="Area, m²"
             value={clause.disregard.area}

@@ -72,7 +72,7 @@ interface DayFieldsProps {
 
 function DayFields({ day, name, onChange, problemAt }: DayFieldsProps) {
   return (
-    <div className="grid gap-3 sm:grid-cols-2">
+    <div className="grid items-start gap-3 sm:grid-cols-2">
       <SelectField
         label={name}
         options={dayKinds}

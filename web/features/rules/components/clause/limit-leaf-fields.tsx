@@ -43,7 +43,7 @@ export function LimitLeafFields({
   );
   return (
     <div className="grid gap-3">
-      <div className="grid gap-3 sm:grid-cols-[minmax(0,3fr)_minmax(0,2fr)]">
+      <div className="grid items-start gap-3 sm:grid-cols-[minmax(0,3fr)_minmax(0,2fr)]">
         <SelectField
           label={name === '' ? 'Requirement' : `Requirement ${name}`}
           options={leafChoices}

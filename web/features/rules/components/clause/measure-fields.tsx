@@ -15,7 +15,7 @@ export interface MeasureFieldsProps {
 /** What is measured, with the figure that some measures need. */
 export function MeasureFields({ label, measure, onChange, problemAt }: MeasureFieldsProps) {
   return (
-    <div className="grid gap-3 sm:grid-cols-[minmax(0,3fr)_minmax(0,2fr)]">
+    <div className="grid items-start gap-3 sm:grid-cols-[minmax(0,3fr)_minmax(0,2fr)]">
       <SelectField
         label={label}
         options={measureChoices}

@@ -61,7 +61,7 @@ export function ReceptorsFields({ clause, onChange, problemAt }: ClausePartProps
           ))}
         </div>
       ) : (
-        <div className="grid gap-3 sm:grid-cols-2">
+        <div className="grid items-start gap-3 sm:grid-cols-2">
           <NumberField
             label="From, metres outside the boundary"
             value={ring.from}
@@ -92,7 +92,7 @@ export function ReceptorsFields({ clause, onChange, problemAt }: ClausePartProps
         value={receptors.of}
         onChange={(of) => set({ of })}
       />
-      <div className="grid gap-3 sm:grid-cols-2">
+      <div className="grid items-start gap-3 sm:grid-cols-2">
         <SelectField
           label="Where the shadow is taken"
           options={heights}

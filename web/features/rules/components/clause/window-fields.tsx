@@ -46,7 +46,7 @@ export function WindowFields({ clause, onChange, problemAt }: ClausePartProps) {
         </div>
       ) : null}
       {'afterSunrise' in window ? (
-        <div className="grid gap-3 sm:grid-cols-2">
+        <div className="grid items-start gap-3 sm:grid-cols-2">
           <NumberField
             label="Minutes after sunrise"
             value={window.afterSunrise}
@@ -61,7 +61,7 @@ export function WindowFields({ clause, onChange, problemAt }: ClausePartProps) {
           />
         </div>
       ) : null}
-      <div className="grid gap-3 sm:grid-cols-2">
+      <div className="grid items-start gap-3 sm:grid-cols-2">
         <NumberField
           label="Lowest sun that counts, degrees"
           description="0 counts the sun from the horizon."
