@@ -85,12 +85,6 @@ export function overlapAreasM2(
   return overlaps;
 }
 
-/** The union of polygons that may touch or overlap, as valid rings. */
-export function uniteRings(clipper: Clipper, rings: readonly Ring[]): Ring[] {
-  const united = combineRings(clipper, 'Union', coordinatesOf(rings));
-  return united.flat().map((ring) => pointsOfRing(ring, (x, y) => [x, y]));
-}
-
 /** A union with more shadows: polygons that none of them can reach stay as they are. */
 function addShadows(
   clipper: Clipper,

@@ -1,4 +1,6 @@
 import { readFileSync } from 'node:fs';
+import { feature, featureCollection, union } from '@turf/turf';
+import type { MultiPolygon, Polygon } from 'geojson';
 import { loadClipper } from '../../../api/clipper.ts';
 import { chooseMapExtent } from '../../../api/modules/reports/map-extent.ts';
 import {
@@ -7,13 +9,11 @@ import {
 } from '../../../api/modules/reports/report-payload.ts';
 import { listFindingRows } from '../../../api/modules/studies/list-finding-rows.ts';
 import { municipalitySchema } from '../../../shared/contracts/base-data.ts';
-import type { Polygonal } from '../../../shared/geometry/geojson-schema.ts';
-import { createLocalPlane } from '../../../shared/geometry/local-plane.ts';
-import { polygonsOf, projectPolygon } from '../../../shared/geometry/project-polygon.ts';
+import { polygonalSchema, type Polygonal } from '../../../shared/geometry/geojson-schema.ts';
+import { polygonsOf } from '../../../shared/geometry/project-polygon.ts';
 import { measureMassing } from '../../../shared/massing/measure-massing.ts';
 import { readMassing } from '../../../shared/massing/read-massing.ts';
 import { ruleSchema } from '../../../shared/rules/rule-schema.ts';
-import { uniteRings } from '../../../shared/shadow/shadow-polygons.ts';
 import { keyDatesOfYear } from '../../../shared/solar/key-dates.ts';
 import { computeStudy } from '../../../shared/study/compute-study.ts';
 import { engineVersion } from '../../../shared/study/engine-version.ts';
@@ -107,16 +107,10 @@ export async function buildLarkhavenPayload(): Promise<ReportPayload> {
   const openSpace = readLayer<{ id: string; class: 'open-space' | 'walk'; name: string }>(
     'open-space',
   );
-  const plane = createLocalPlane(municipality.longitude, municipality.latitude);
-  const site: Polygonal = {
-    type: 'Polygon',
-    coordinates: uniteRings(
-      clipper,
-      siteParcels.flatMap(({ geometry }) => projectPolygon(geometry, plane)),
-    )
-      .slice(0, 1)
-      .map((ring) => [...ring, ...ring.slice(0, 1)].map((point) => plane.toLngLat(point))),
-  };
+  const united = union(
+    featureCollection<Polygon | MultiPolygon>(siteParcels.map(({ geometry }) => feature(geometry))),
+  );
+  const site = polygonalSchema.parse(united?.geometry);
   const place = {
     name: municipality.name,
     timezone: municipality.timeZone,
