@@ -22,8 +22,18 @@ const trialFindingSchema = findingRowSchema.pick({
 });
 export type TrialFinding = z.infer<typeof trialFindingSchema>;
 
-/** From what matters most to what stays: `worse` is not met under the draft alone, `better` under the other alone. */
-export const trialChangeSchema = z.enum(['worse', 'better', 'finding', 'figures', 'same']);
+/**
+ * From what matters most to what stays: `worse` is not met under the draft alone, `better` under the
+ * other alone, `one-sided` is judged by one of them alone and meets it.
+ */
+export const trialChangeSchema = z.enum([
+  'worse',
+  'better',
+  'finding',
+  'figures',
+  'one-sided',
+  'same',
+]);
 export type TrialChange = z.infer<typeof trialChangeSchema>;
 
 export const trialRowSchema = z.object({

@@ -58,17 +58,21 @@ export function compareTrial(inForce: JudgedByRule, draft: JudgedByRule): Compar
 function changeOf(inForce: TrialFinding | null, draft: TrialFinding | null): TrialChange {
   const isNotMet = (side: TrialFinding | null) => side?.finding === 'not-met';
   if (isNotMet(draft) !== isNotMet(inForce)) return isNotMet(draft) ? 'worse' : 'better';
-  if (draft?.finding !== inForce?.finding) return 'finding';
-  const figures = (side: TrialFinding | null) =>
-    JSON.stringify([side?.before, side?.after, side?.limit, side?.unit, side?.day, side?.band]);
+  if (draft === null || inForce === null) return 'one-sided';
+  if (draft.finding !== inForce.finding) return 'finding';
+  const figures = (side: TrialFinding) =>
+    JSON.stringify([side.before, side.after, side.limit, side.unit, side.day, side.band]);
   return figures(draft) === figures(inForce) ? 'same' : 'figures';
 }
 
 function byChange(one: TrialRow, other: TrialRow): number {
   const rank = ({ change }: TrialRow) => trialChangeSchema.options.indexOf(change);
-  const marginOf = ({ draft, inForce }: TrialRow) => (draft ?? inForce)?.margin ?? 0;
+  const either = ({ draft, inForce }: TrialRow) => draft ?? inForce;
+  const isUntouched = (row: TrialRow) => Number(either(row)?.finding === 'not-affected');
+  const marginOf = (row: TrialRow) => either(row)?.margin ?? 0;
   return (
     rank(one) - rank(other) ||
+    isUntouched(one) - isUntouched(other) ||
     marginOf(one) - marginOf(other) ||
     one.label.localeCompare(other.label, 'en', { numeric: true })
   );

@@ -120,6 +120,10 @@ describe('a rule tried on a case', () => {
       }),
     );
     expect(rowOf(trial, 'Y-1')).toMatchObject({ clause: 'yards-alone', inForce: null });
+    // What the rule in force says of parcels falls away with its clause: N-1 failed there.
+    expect(trial.rows.filter(({ change }) => change === 'better')).toMatchObject([
+      { receptor: 'N-1', inForce: { finding: 'not-met' }, draft: null },
+    ]);
     expect(trial.rows.find(({ clause }) => clause === 'winter-noon-hours')).toMatchObject({
       draft: null,
     });

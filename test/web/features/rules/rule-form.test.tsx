@@ -6,6 +6,9 @@ import { draftOfRule } from '../../../../web/features/rules/rule-draft.ts';
 import { ApiError } from '../../../../web/lib/api-error.ts';
 import { renderInPlace, withPlainSpaces } from '../../support/render-in-place.tsx';
 
+// A whole form with its calendar is drawn anew for each letter.
+vi.setConfig({ testTimeout: 20_000 });
+
 const noon = {
   id: 'noon',
   title: 'Noon hours',

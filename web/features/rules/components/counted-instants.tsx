@@ -100,6 +100,11 @@ function hasClocks(window: RuleWindow): boolean {
     : /^\d\d:\d\d$/.test(window.from) && /^\d\d:\d\d$/.test(window.to);
 }
 
+/** A clock that ends with a point, as in p.m., ends the sentence too. */
+function endSentence(words: string): string {
+  return words.endsWith('.') ? words : `${words}.`;
+}
+
 function describeDates(dates: readonly string[], year: number, formats: Formats): string {
   const [first] = dates;
   const last = dates.at(-1);
@@ -115,7 +120,10 @@ function describeInstants({ daylight, counted, instants }: DayOfClause, formats:
   const clock = (atMs: number) => formats.clock(new Date(atMs).toISOString());
   const say = (spans: DayOfClause['counted']) =>
     spans.map(({ startMs, endMs }) => `from ${clock(startMs)} to ${clock(endMs)}`).join(' and ');
-  const sun = daylight.length === 0 ? 'The sun does not rise.' : `The sun is up ${say(daylight)}.`;
+  const sun =
+    daylight.length === 0
+      ? 'The sun does not rise.'
+      : endSentence(`The sun is up ${say(daylight)}`);
   const [first] = instants;
   if (first === undefined) {
     return `${sun} None of it lies in the hours of the clause: nothing counts on this day.`;

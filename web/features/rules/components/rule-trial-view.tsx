@@ -104,11 +104,13 @@ export function RuleTrialView({ trial }: { trial: RuleTrial }) {
 
 function describeOutcome({ inForce, draft, rows }: RuleTrial): string {
   const count = (change: TrialRow['change']) => rows.filter((row) => row.change === change).length;
-  const places = (number: number) => (number === 1 ? '1 finding' : `${number} findings`);
+  const places = (number: number) =>
+    number === 0 ? 'No finding' : number === 1 ? '1 finding' : `${number} findings`;
   const met = (side: RuleTrial['draft']) => (side.met ? 'meets' : 'does not meet');
   return [
     `The case ${met(inForce)} version ${inForce.version}, which is in force, and ${met(draft)} version ${draft.version}.`,
-    `${places(count('worse'))} would turn to not met, ${places(count('better'))} would no longer be not met.`,
+    `${places(count('worse'))} would turn to not met.`,
+    `${places(count('better'))} would cease to be not met.`,
   ].join(' ');
 }
 

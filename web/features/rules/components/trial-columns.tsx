@@ -10,9 +10,10 @@ import type { Formats } from '../../../lib/formats.ts';
 
 const changeWords = {
   worse: 'turns to not met',
-  better: 'is no longer not met',
+  better: 'ceases to be not met',
   finding: 'another finding',
   figures: 'other figures',
+  'one-sided': 'judged by one of the two alone',
   same: 'stays',
 } as const satisfies Record<TrialChange, string>;
 
