@@ -1,5 +1,5 @@
 import type { MultiPolygon } from 'geojson';
-import { degreesPerUnit } from '../shared/study/draw-instant.ts';
+import { degreesPerUnit, type InstantShadowPolygons } from '../shared/study/draw-instant.ts';
 import { loadGeos, polygonsWithin, type Geos } from './geos.ts';
 
 let starting: Promise<Geos> | undefined;
@@ -27,4 +27,16 @@ export async function makePolygonsValid(polygons: MultiPolygon): Promise<MultiPo
   } finally {
     geos.GEOSGeom_destroy(drawn);
   }
+}
+
+/** An instant's three kinds of shadows, each as `makePolygonsValid` gives it. */
+export async function makeShadowsValid(
+  drawn: InstantShadowPolygons,
+): Promise<InstantShadowPolygons> {
+  return {
+    ...drawn,
+    before: await makePolygonsValid(drawn.before),
+    after: await makePolygonsValid(drawn.after),
+    netNew: await makePolygonsValid(drawn.netNew),
+  };
 }

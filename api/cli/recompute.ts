@@ -15,7 +15,7 @@ import {
 } from '../../shared/study/evidence-schema.ts';
 import { readStudyInput, type InputIssue } from '../../shared/study/read-study-input.ts';
 import { loadClipper } from '../clipper.ts';
-import { makePolygonsValid } from '../valid-polygons.ts';
+import { makeShadowsValid } from '../valid-polygons.ts';
 
 const exitCodes = { done: 0, different: 1, invalid: 2, lastDigits: 3, otherEngine: 4 } as const;
 
@@ -132,14 +132,8 @@ async function withShadows(
     instants.map(async (instant) => {
       const found = drawn.get(instant.at);
       if (found === undefined) return { ...instant, shadows: null };
-      return {
-        ...instant,
-        shadows: {
-          before: await makePolygonsValid(found.before),
-          after: await makePolygonsValid(found.after),
-          netNew: await makePolygonsValid(found.netNew),
-        },
-      };
+      const { before, after, netNew } = await makeShadowsValid(found);
+      return { ...instant, shadows: { before, after, netNew } };
     }),
   );
 }

@@ -1,11 +1,12 @@
 import type { EntityManager } from '@mikro-orm/postgresql';
 import type { InstantShadows } from '../../../shared/contracts/studies.ts';
 import type { Clipper } from '../../../shared/shadow/clipper.ts';
+import { presentShadows } from '../../../shared/study/present-shadows.ts';
 import { castShadowsAt } from '../../../shared/study/shadows-at.ts';
 import { AppError } from '../../errors.ts';
 import type { Actor } from '../../policy.ts';
+import { makeShadowsValid } from '../../valid-polygons.ts';
 import { getFinishedStudy } from './get-study.ts';
-import { presentInstantShadows } from './present-instant-shadows.ts';
 import { readStoredInput } from './read-evidence.ts';
 import { StudyInstant } from './study-instant.entity.ts';
 
@@ -32,5 +33,5 @@ export async function getStudyShadows(
   await em.populate(study, ['evidence']);
   const drawn = castShadowsAt(readStoredInput(study), at, clipper);
   if (drawn === null) throw new AppError('INSTANT_INVALID');
-  return presentInstantShadows(drawn);
+  return presentShadows(await makeShadowsValid(drawn));
 }

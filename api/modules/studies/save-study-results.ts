@@ -2,8 +2,9 @@ import { LockMode } from '@mikro-orm/core';
 import type { EntityManager } from '@mikro-orm/postgresql';
 import type { InstantShadows } from '../../../shared/contracts/studies.ts';
 import type { ComputedStudy } from '../../../shared/study/compute-study.ts';
+import { presentShadows } from '../../../shared/study/present-shadows.ts';
+import { makeShadowsValid } from '../../valid-polygons.ts';
 import { listFindingRows } from './list-finding-rows.ts';
-import { presentInstantShadows } from './present-instant-shadows.ts';
 import { StudyInstant } from './study-instant.entity.ts';
 import type { StudyRun } from './study-run.ts';
 import { Study } from './study.entity.ts';
@@ -15,7 +16,9 @@ export async function saveStudyResults(
   { evidence, shadows }: ComputedStudy,
 ): Promise<boolean> {
   const shadowsAt = new Map<string, InstantShadows>();
-  for (const drawn of shadows) shadowsAt.set(drawn.at, await presentInstantShadows(drawn));
+  for (const drawn of shadows) {
+    shadowsAt.set(drawn.at, presentShadows(await makeShadowsValid(drawn)));
+  }
   return em.transactional(async (tx) => {
     const study = await tx.findOne(
       Study,

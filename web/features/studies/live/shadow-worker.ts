@@ -1,7 +1,5 @@
 import wasmUrl from 'clipper2-wasm/dist/es/clipper2z.wasm?url';
-import type { MultiPolygon } from 'geojson';
 import { z } from 'zod';
-import type { InstantShadows, ShadowKind } from '../../../../shared/contracts/studies.ts';
 import { createClipper } from '../../../../shared/shadow/clipper.ts';
 import { studyInputSchema } from '../../../../shared/study/evidence-schema.ts';
 import {
@@ -9,6 +7,7 @@ import {
   type LiveInstant,
   type LiveStudy,
 } from '../../../../shared/study/live-study.ts';
+import { presentShadows } from '../../../../shared/study/present-shadows.ts';
 import type { LiveAnswer, LiveQuestion, LiveShadows } from './live-messages.ts';
 
 /** The engine beside the page: it fetches a study's input once and then answers without a request. */
@@ -54,7 +53,7 @@ function answerFrom(
   switch (question.kind) {
     case 'shadows': {
       const instant = opened.shadowsAt(question.at);
-      return { kind: 'shadows', drawn: instant === null ? null : present(instant) };
+      return { kind: 'shadows', drawn: instant === null ? null : toLiveShadows(instant) };
     }
     case 'day':
       return { kind: 'day', day: opened.dayOf(question.receptor, question.date) };
@@ -73,26 +72,6 @@ async function readJson(response: Response): Promise<unknown> {
   return response.json();
 }
 
-function present(instant: LiveInstant): LiveShadows {
-  const feature = (kind: ShadowKind): InstantShadows['features'][number] => ({
-    type: 'Feature',
-    properties: { kind },
-    geometry: { type: 'MultiPolygon', coordinates: toLngLats(instant[kind]) },
-  });
-  return {
-    shadows: {
-      type: 'FeatureCollection',
-      at: instant.at,
-      azimuthDeg: instant.azimuthDeg,
-      altitudeDeg: instant.altitudeDeg,
-      features: [feature('before'), feature('after'), feature('netNew')],
-    },
-    netNewM2: instant.netNewM2,
-  };
-}
-
-function toLngLats({ coordinates }: MultiPolygon): [number, number][][][] {
-  return coordinates.map((rings) =>
-    rings.map((ring) => ring.map(([lng = NaN, lat = NaN]): [number, number] => [lng, lat])),
-  );
+function toLiveShadows(instant: LiveInstant): LiveShadows {
+  return { shadows: presentShadows(instant), netNewM2: instant.netNewM2 };
 }
