@@ -1,5 +1,5 @@
 import { clearSkyBeamWm2, incidenceCosine, type ClearSky } from '../solar/clear-sky-beam.ts';
-import { sunPositionAt } from '../solar/sun-position.ts';
+import type { SunPosition } from '../solar/sun-position.ts';
 import type { StudyInput } from './evidence-schema.ts';
 import type { SceneReceptor } from './scene-receptor.ts';
 
@@ -15,12 +15,10 @@ export function skyOf(date: string, input: StudyInput): ClearSky {
 
 /** Direct clear-sky irradiance on a receptor's own slope, W/m². */
 export function beamOnReceptorWm2(
-  atMs: number,
+  sun: SunPosition,
   receptor: Pick<SceneReceptor, 'tiltDeg' | 'facingDeg'>,
   sky: ClearSky,
-  input: StudyInput,
 ): number {
-  const sun = sunPositionAt(atMs, input.place.longitude, input.place.latitude);
   return (
     clearSkyBeamWm2(sun.altitudeDeg, sky) *
     incidenceCosine(sun, receptor.tiltDeg, receptor.facingDeg)

@@ -1,19 +1,19 @@
 import type { SunLedger } from '../receptors/sun-ledger-schema.ts';
 import { integrateHours, runsAbove, type Run, type SpanLight } from '../rules/day-light.ts';
 import { instantsOfSpan } from '../rules/rule-window.ts';
-import { blocksTowardSun } from '../shadow/blocks-toward-sun.ts';
-import { createShadowCaster } from '../shadow/shadow-layer.ts';
 import { createInstantFormat, wholeClockHours } from '../solar/civil-time.ts';
 import { keyDatesOfYear } from '../solar/key-dates.ts';
 import { sunAboveSpans } from '../solar/sun-above.ts';
-import { sunPositionAt } from '../solar/sun-position.ts';
+import type { SunPosition } from '../solar/sun-position.ts';
 import { beamOnReceptorWm2, skyOf } from './clear-sky.ts';
 import type { StudyInput } from './evidence-schema.ts';
-import { measureLight } from './measure-light.ts';
+import { lightAtInstant } from './instant-light.ts';
 import { roundArea, roundEnergy, roundMeasure } from './rounding.ts';
 import { buildScene, type Scene, type SceneReceptor } from './scene.ts';
 
-type LedgerSpan = Pick<SpanLight, 'atMs' | 'lights' | 'beamWm2'>;
+interface LedgerSpan extends Pick<SpanLight, 'atMs' | 'lights' | 'beamWm2'> {
+  suns: readonly SunPosition[];
+}
 
 /** The share of a receptor's open area whose loss counts as losing the sun there. */
 const noticedShare = 0.05;
@@ -103,19 +103,21 @@ export function computeLedgerDay(
       toAt: instant(span.atMs.at(-1) ?? 0),
       ...account([span], receptor.openAreaM2),
     })),
-    samples: lit.flatMap((span, spanIndex) =>
-      span.atMs.slice(spanIndex === 0 ? 0 : 1).map((atMs, index) => {
-        const light = span.lights[index + (spanIndex === 0 ? 0 : 1)];
+    samples: lit.flatMap((span, spanIndex) => {
+      // The first instant of a span is the last of the one before.
+      const skipped = spanIndex === 0 ? 0 : 1;
+      return span.atMs.slice(skipped).map((atMs, index) => {
+        const light = span.lights[skipped + index];
         const share = (areaM2: number) =>
           receptor.openAreaM2 > 0 ? roundMeasure(areaM2 / receptor.openAreaM2) : 0;
         return {
           at: instant(atMs),
-          altitudeDeg: roundMeasure(sunPositionAt(atMs, longitude, latitude).altitudeDeg),
+          altitudeDeg: roundMeasure(span.suns[skipped + index]?.altitudeDeg ?? NaN),
           shareBefore: share(light?.sunBeforeM2 ?? 0),
           shareAfter: share(light?.sunAfterM2 ?? 0),
         };
-      }),
-    ),
+      });
+    }),
   };
 }
 
@@ -128,15 +130,14 @@ function lightThrough(
 ): LedgerSpan {
   const atMs = instantsOfSpan({ startMs, endMs }, stepMin);
   const sky = skyOf(date, input);
+  const { area, planeM } = receptor;
+  const within = { box: area.box, lowestPlaneM: planeM };
+  const instants = atMs.map((at) => lightAtInstant(scene, scene.blocks, input, at, within));
   return {
     atMs,
-    lights: atMs.map((at) => {
-      const sun = sunPositionAt(at, input.place.longitude, input.place.latitude);
-      const { area, planeM } = receptor;
-      const standing = blocksTowardSun(scene.blocks, sun, area.box, planeM);
-      return measureLight(scene, receptor, createShadowCaster(standing, sun)(planeM), sun);
-    }),
-    beamWm2: atMs.map((at) => beamOnReceptorWm2(at, receptor, sky, input)),
+    suns: instants.map(({ sun }) => sun),
+    lights: instants.map(({ lightOn }) => lightOn(receptor, planeM)),
+    beamWm2: instants.map(({ sun }) => beamOnReceptorWm2(sun, receptor, sky)),
   };
 }
 
