@@ -1,9 +1,10 @@
+import { boxOfFlatRings } from '../geometry/flat-rings.ts';
 import type { Box } from '../geometry/ring.ts';
 import type { SamplePoints } from './sample-points.ts';
 import { addEdgeToRuns, sumAlongRuns } from './sample-points.ts';
 import { castContour } from './shadow-contours.ts';
 import type { ShadowLayer, ShadowRole } from './shadow-layer.ts';
-import { turnIntoFrame, type SunFrame } from './sun-frame.ts';
+import { turnIntoFrame, turnOutOfFrame, type SunFrame } from './sun-frame.ts';
 
 /** Whether each point is in sun at one instant: 1, or 0 in shade. */
 export interface PointLight {
@@ -85,29 +86,11 @@ function createContourCache() {
   };
 }
 
-function turnOutOfFrame(ring: readonly number[], { awayX, awayY }: SunFrame): Float64Array {
-  const turned = new Float64Array(ring.length);
-  for (let index = 0; index + 1 < ring.length; index += 2) {
-    const x = ring[index] ?? NaN;
-    const y = ring[index + 1] ?? NaN;
-    turned[index] = x * awayX - y * awayY;
-    turned[index + 1] = x * awayY + y * awayX;
-  }
-  return turned;
-}
-
 /** The box in a sun's frame around a box of the local plane. */
 function boxInFrame({ minX, minY, maxX, maxY }: Box, frame: SunFrame): Box {
   const corners = turnIntoFrame(
     Float64Array.of(minX, minY, maxX, minY, maxX, maxY, minX, maxY),
     frame,
   );
-  const xs = [0, 2, 4, 6].map((index) => corners[index] ?? NaN);
-  const ys = [1, 3, 5, 7].map((index) => corners[index] ?? NaN);
-  return {
-    minX: Math.min(...xs),
-    minY: Math.min(...ys),
-    maxX: Math.max(...xs),
-    maxY: Math.max(...ys),
-  };
+  return boxOfFlatRings(corners, [{ start: 0, end: corners.length }]);
 }

@@ -51,6 +51,21 @@ export function turnIntoFrame(
   return into;
 }
 
+/** Points of a sun's frame, x and y one after the other, on the local plane. */
+export function turnOutOfFrame(
+  points: readonly number[],
+  { awayX, awayY }: SunFrame,
+): Float64Array {
+  const turned = new Float64Array(points.length);
+  for (let index = 0; index + 1 < points.length; index += 2) {
+    const x = points[index] ?? NaN;
+    const y = points[index + 1] ?? NaN;
+    turned[index] = x * awayX - y * awayY;
+    turned[index + 1] = x * awayY + y * awayX;
+  }
+  return turned;
+}
+
 /** A point of a sun's frame on the local plane. */
 export function pointFromFrame(x: number, y: number, { awayX, awayY }: SunFrame): PlanePoint {
   return [x * awayX - y * awayY, x * awayY + y * awayX];
