@@ -11,6 +11,7 @@ import { formatInstant } from '../../shared/solar/civil-time.ts';
 import { sunAboveSpans } from '../../shared/solar/sun-above.ts';
 import type { StudyInput } from '../../shared/study/evidence-schema.ts';
 import type {} from './browser/page.ts';
+import { median } from './measuring.ts';
 import { makeTown } from './town.ts';
 
 /** Of one kind of question: how often it was asked, and how long it took, in milliseconds. */
@@ -190,10 +191,6 @@ function worstOf(days: readonly WorkerTimes[]): WorkerTimes {
     answerMedianMs: most('answerMedianMs'),
     answerWorstMs: most('answerWorstMs'),
   };
-}
-
-function median(values: readonly number[]): number {
-  return values.toSorted((a, b) => a - b)[Math.floor(values.length / 2)] ?? NaN;
 }
 
 /** The figures as rows of a table; the targets are 16 ms for an instant and 5 ms for a point's day. */

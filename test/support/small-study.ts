@@ -1,7 +1,8 @@
 import type { z } from 'zod';
 import { createLocalPlane } from '../../shared/geometry/local-plane.ts';
 import type { PlanePoint, Ring } from '../../shared/geometry/ring.ts';
-import type { studyInputSchema } from '../../shared/study/evidence-schema.ts';
+import type { StudyInput, studyInputSchema } from '../../shared/study/evidence-schema.ts';
+import { readStudyInput } from '../../shared/study/read-study-input.ts';
 
 export type StudyInputDraft = z.input<typeof studyInputSchema>;
 type Block = StudyInputDraft['blocks']['features'][number];
@@ -103,4 +104,11 @@ export function studyInputOf(parts: {
       clauses: parts.clauses ?? [clauseOf()],
     },
   };
+}
+
+/** What the engine makes of an input. @throws where it refuses it */
+export function readInput(value: unknown): StudyInput {
+  const result = readStudyInput(value);
+  if (!result.ok) throw new Error(JSON.stringify(result.issues));
+  return result.input;
 }

@@ -1,9 +1,8 @@
-import { once } from 'node:events';
-import type { Server } from 'node:http';
 import { gzipSync } from 'node:zlib';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { problemSchema } from '../../../shared/contracts/problem.ts';
 import type { ErrorCode } from '../../../shared/contracts/problem.ts';
+import { listen, type ListeningServer } from '../../support/listening-server.ts';
 import { buildSmallCity, tower } from '../../support/small-city.ts';
 import { bodyOf, startTestApi, type Agent, type TestApi } from '../../support/test-api.ts';
 
@@ -135,21 +134,15 @@ describe('a body of JSON', () => {
 });
 
 describe('a packed body', () => {
-  let server: Server;
+  let server: ListeningServer;
 
   beforeAll(async () => {
-    server = api.app.listen(0, '127.0.0.1');
-    await once(server, 'listening');
+    server = await listen(api.app);
   });
-  afterAll(async () => {
-    server.close();
-    await once(server, 'close');
-  });
+  afterAll(() => server.close());
 
   async function codeOf(encoding: string, bytes: Buffer): Promise<ErrorCode> {
-    const address = server.address();
-    if (address === null || typeof address === 'string') throw new Error('The server has no port.');
-    const response = await fetch(`http://127.0.0.1:${address.port}/api/session`, {
+    const response = await fetch(`http://127.0.0.1:${server.port}/api/session`, {
       method: 'POST',
       headers: { 'Content-Type': 'application/json', 'Content-Encoding': encoding },
       body: new Uint8Array(bytes),

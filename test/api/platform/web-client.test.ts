@@ -1,12 +1,11 @@
-import { once } from 'node:events';
 import { mkdirSync, mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { request } from 'node:http';
-import type { Server } from 'node:http';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { text } from 'node:stream/consumers';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { problemSchema } from '../../../shared/contracts/problem.ts';
+import { listen, type ListeningServer } from '../../support/listening-server.ts';
 import { startTestApi, type Agent, type TestApi } from '../../support/test-api.ts';
 
 const page = '<!doctype html><title>The client</title>';
@@ -121,22 +120,16 @@ describe('the files of the client', () => {
 });
 
 describe('nothing beside the client', () => {
-  let server: Server;
+  let server: ListeningServer;
 
   beforeAll(async () => {
-    server = api.app.listen(0, '127.0.0.1');
-    await once(server, 'listening');
+    server = await listen(api.app);
   });
-  afterAll(async () => {
-    server.close();
-    await once(server, 'close');
-  });
+  afterAll(() => server.close());
 
   /** The path as it is written here: other senders would put it in order first. */
   async function sendRaw(rawPath: string): Promise<{ status: number; answer: string }> {
-    const address = server.address();
-    if (address === null || typeof address === 'string') throw new Error('The server has no port.');
-    const { port } = address;
+    const { port } = server;
     return new Promise((resolve, reject) => {
       const sent = request({ host: '127.0.0.1', port, path: rawPath, agent: false }, (response) => {
         text(response).then(

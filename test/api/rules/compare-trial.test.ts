@@ -1,31 +1,11 @@
 import { describe, expect, it } from 'vitest';
 import { compareTrial, type JudgedByRule } from '../../../api/modules/rules/compare-trial.ts';
 import type { FindingRow } from '../../../shared/contracts/studies.ts';
+import { makeFindingRow } from '../../support/finding-row.ts';
 import { smallCityRule } from '../../support/small-city.ts';
 
-function makeRow(receptor: string, change: Partial<FindingRow> = {}): FindingRow {
-  return {
-    receptor,
-    label: receptor,
-    class: 'parcel',
-    clause: 'winter-noon-hours',
-    clauseTitle: 'Two hours',
-    day: '2026-12-21',
-    finding: 'met',
-    close: false,
-    measure: 'sun-hours',
-    unit: 'h',
-    before: 4,
-    after: 3,
-    lost: 1,
-    limit: 2,
-    margin: 1,
-    loss: 0.25,
-    band: 'moderate',
-    sentence: 'It is met.',
-    ...change,
-  };
-}
+const makeRow = (receptor: string, change: Partial<FindingRow> = {}): FindingRow =>
+  makeFindingRow({ receptor, label: receptor, ...change });
 
 const judged = (version: number, rows: FindingRow[]): JudgedByRule => ({
   rule: { ...smallCityRule(), version },

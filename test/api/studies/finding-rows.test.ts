@@ -6,31 +6,8 @@ import { summariseFindings } from '../../../api/modules/studies/summarise-findin
 import type { FindingRow } from '../../../shared/contracts/studies.ts';
 import { evidenceFileSchema } from '../../../shared/study/evidence-schema.ts';
 import type { ClauseResult, EvidenceFile } from '../../../shared/study/evidence-schema.ts';
+import { makeFindingRow } from '../../support/finding-row.ts';
 import { rectangle, smallCityRule } from '../../support/small-city.ts';
-
-function makeRow(change: Partial<FindingRow>): FindingRow {
-  return {
-    receptor: 'N-1',
-    label: '1 Test Row',
-    class: 'parcel',
-    clause: 'winter-noon-hours',
-    clauseTitle: 'Two hours',
-    day: '2026-12-21',
-    finding: 'met',
-    close: false,
-    measure: 'sun-hours',
-    unit: 'h',
-    before: 4,
-    after: 3,
-    lost: 1,
-    limit: 2,
-    margin: 1,
-    loss: 0.25,
-    band: 'moderate',
-    sentence: 'It is met.',
-    ...change,
-  };
-}
 
 function makeEvidence(clause: Partial<ClauseResult>): EvidenceFile {
   return evidenceFileSchema.parse({
@@ -109,10 +86,10 @@ describe('the findings table', () => {
 
   it('puts what is not met first and of that the worst margin', () => {
     const rows = [
-      makeRow({ receptor: 'a', finding: 'not-affected', margin: 0 }),
-      makeRow({ receptor: 'b', finding: 'not-met', margin: -0.2 }),
-      makeRow({ receptor: 'c', finding: 'met', margin: 2 }),
-      makeRow({ receptor: 'd', finding: 'not-met', margin: -1.2 }),
+      makeFindingRow({ receptor: 'a', finding: 'not-affected', margin: 0 }),
+      makeFindingRow({ receptor: 'b', finding: 'not-met', margin: -0.2 }),
+      makeFindingRow({ receptor: 'c', finding: 'met', margin: 2 }),
+      makeFindingRow({ receptor: 'd', finding: 'not-met', margin: -1.2 }),
     ];
     expect(selectFindingRows(rows, {}).map(({ receptor }) => receptor)).toEqual([
       'd',
@@ -123,7 +100,10 @@ describe('the findings table', () => {
   });
 
   it('sorts house numbers as numbers', () => {
-    const rows = [makeRow({ label: '10 Test Row' }), makeRow({ label: '9 Test Row' })];
+    const rows = [
+      makeFindingRow({ label: '10 Test Row' }),
+      makeFindingRow({ label: '9 Test Row' }),
+    ];
     expect(selectFindingRows(rows, { sort: 'label' }).map(({ label }) => label)).toEqual([
       '9 Test Row',
       '10 Test Row',
@@ -133,9 +113,19 @@ describe('the findings table', () => {
 
 describe('the findings table, narrowed and sorted', () => {
   const rows = [
-    makeRow({ receptor: 'a', class: 'yard', limit: 3, sentence: 'The yard of a loses sun.' }),
-    makeRow({ receptor: 'b', class: 'ring', limit: 1, clauseTitle: 'Bands beyond the boundary' }),
-    makeRow({ receptor: 'c', class: 'yard', limit: 40, unit: 'm²' }),
+    makeFindingRow({
+      receptor: 'a',
+      class: 'yard',
+      limit: 3,
+      sentence: 'The yard of a loses sun.',
+    }),
+    makeFindingRow({
+      receptor: 'b',
+      class: 'ring',
+      limit: 1,
+      clauseTitle: 'Bands beyond the boundary',
+    }),
+    makeFindingRow({ receptor: 'c', class: 'yard', limit: 40, unit: 'm²' }),
   ];
   const receptorsOf = (query: Parameters<typeof selectFindingRows>[1]) =>
     selectFindingRows(rows, query).map(({ receptor }) => receptor);
@@ -174,11 +164,17 @@ describe('the findings summed up', () => {
 
   it('count each finding of a clause, and name the worst that is not met', () => {
     const rows = [
-      makeRow({ receptor: 'a', finding: 'not-met', margin: -0.2 }),
-      makeRow({ receptor: 'b', finding: 'not-met', margin: -1, label: '2 Test Row', close: true }),
-      makeRow({ receptor: 'c', finding: 'disregarded', margin: -3 }),
-      makeRow({ receptor: 'd', finding: 'met' }),
-      makeRow({ receptor: 'e', finding: 'not-affected', class: 'yard' }),
+      makeFindingRow({ receptor: 'a', finding: 'not-met', margin: -0.2 }),
+      makeFindingRow({
+        receptor: 'b',
+        finding: 'not-met',
+        margin: -1,
+        label: '2 Test Row',
+        close: true,
+      }),
+      makeFindingRow({ receptor: 'c', finding: 'disregarded', margin: -3 }),
+      makeFindingRow({ receptor: 'd', finding: 'met' }),
+      makeFindingRow({ receptor: 'e', finding: 'not-affected', class: 'yard' }),
     ];
     expect(summarise(rows, 'not-met')).toEqual({
       classes: ['parcel', 'yard'],
@@ -200,9 +196,9 @@ describe('the findings summed up', () => {
   });
 
   it('name no worst where margins have several units, or nothing is affected', () => {
-    const mixed = [makeRow({}), makeRow({ unit: 'm²' })];
+    const mixed = [makeFindingRow({}), makeFindingRow({ unit: 'm²' })];
     expect(summarise(mixed, 'met').clauses[0]?.worst).toBeNull();
-    const untouched = [makeRow({ finding: 'not-affected' })];
+    const untouched = [makeFindingRow({ finding: 'not-affected' })];
     expect(summarise(untouched, 'met').clauses[0]?.worst).toBeNull();
   });
 
@@ -215,7 +211,7 @@ describe('the findings summed up', () => {
 
 describe('the findings table as CSV', () => {
   const cellsOf = (change: Partial<FindingRow>) =>
-    renderFindingsCsv([makeRow(change)]).split('\r\n')[1];
+    renderFindingsCsv([makeFindingRow(change)]).split('\r\n')[1];
 
   it('doubles quotes and quotes what has a comma or a line break (RFC 4180, 2.6 and 2.7)', () => {
     expect(cellsOf({ label: 'The "Old" Mill, north\nwing' })).toContain(
@@ -239,6 +235,8 @@ describe('the findings table as CSV', () => {
   });
 
   it('ends every line with CRLF', () => {
-    expect(renderFindingsCsv([makeRow({}), makeRow({})]).match(/\r\n/g)).toHaveLength(3);
+    expect(renderFindingsCsv([makeFindingRow({}), makeFindingRow({})]).match(/\r\n/g)).toHaveLength(
+      3,
+    );
   });
 });

@@ -11,6 +11,7 @@ import { makeRectangle } from '../../support/plane-scenes.ts';
 import {
   blockFeature,
   clauseOf,
+  readInput,
   receptorFeature,
   smallPlace,
   studyInputOf,
@@ -21,13 +22,8 @@ beforeAll(async () => {
   clipper = await loadClipper();
 });
 
-function read(value: unknown) {
-  const result = readStudyInput(value);
-  if (!result.ok) throw new Error(JSON.stringify(result.issues));
-  return result.input;
-}
-
-const compute = async (value: unknown) => (await computeStudy(read(value), { clipper })).evidence;
+const compute = async (value: unknown) =>
+  (await computeStudy(readInput(value), { clipper })).evidence;
 
 /** A wall of a building 400 m long from west to east, south of the yard: it shades by its height alone. */
 const longBlock = (role: 'context' | 'existing' | 'proposed', topM: number) =>
@@ -192,7 +188,7 @@ describe('a study', () => {
   });
 
   it('lists the hours of daylight and the ends of the window when no instants are named', async () => {
-    const input = read(studyInputOf({ blocks: [], receptors: [yard] }));
+    const input = readInput(studyInputOf({ blocks: [], receptors: [yard] }));
     const { instants: _instants, ...unnamed } = input;
     const { evidence } = await computeStudy(unnamed, { clipper });
     expect(evidence.instants).toContain('2026-12-21T12:00:00+00:00');
@@ -203,7 +199,7 @@ describe('a study', () => {
   });
 
   it('tells its progress instant by instant and ends when the caller throws', async () => {
-    const input = read(studyInputOf({ blocks: [], receptors: [yard] }));
+    const input = readInput(studyInputOf({ blocks: [], receptors: [yard] }));
     const seen: number[] = [];
     const run = computeStudy(input, {
       clipper,
@@ -219,7 +215,9 @@ describe('a study', () => {
 
 describe('the sun ledger', () => {
   it('adds its hours up to the day and loses what a long wall takes', () => {
-    const input = read(studyInputOf({ blocks: [longBlock('proposed', 60)], receptors: [yard] }));
+    const input = readInput(
+      studyInputOf({ blocks: [longBlock('proposed', 60)], receptors: [yard] }),
+    );
     const ledger = computeReceptorLedger(input, '12');
     expect(ledger.days.map((day) => day.event)).toEqual([
       'march-equinox',
@@ -244,7 +242,7 @@ describe('the sun ledger', () => {
     });
     const evidence = await compute(value);
     const [test] = evidence.results.receptors[0]?.clauses[0]?.tests ?? [];
-    const winter = computeReceptorLedger(read(value), '12').days[3];
+    const winter = computeReceptorLedger(readInput(value), '12').days[3];
     // Both integrate every five minutes; the ledger also cuts at whole hours.
     expect(winter?.sunHours.before).toBeCloseTo(test?.before ?? 0, 2);
     expect(winter?.sunHours.after).toBeCloseTo(test?.after ?? 0, 2);

@@ -9,6 +9,7 @@ import { makeRectangle } from '../../support/plane-scenes.ts';
 import {
   blockFeature,
   clauseOf,
+  readInput,
   receptorFeature,
   studyInputOf,
   toPolygon,
@@ -20,14 +21,8 @@ beforeAll(async () => {
   clipper = await loadClipper();
 });
 
-function read(value: unknown) {
-  const result = readStudyInput(value);
-  if (!result.ok) throw new Error(JSON.stringify(result.issues));
-  return result.input;
-}
-
 async function compute(value: unknown): Promise<EvidenceFile> {
-  const { evidence } = await computeStudy(read(value), { clipper });
+  const { evidence } = await computeStudy(readInput(value), { clipper });
   // What is computed is a file that can be read again.
   expect(evidenceFileSchema.parse(JSON.parse(JSON.stringify(evidence)))).toEqual(evidence);
   return evidence;
@@ -323,7 +318,7 @@ describe('a window', () => {
     // of it, level ground the sine, so about three times as much.
     expect((window ?? NaN) / (ground ?? NaN)).toBeGreaterThan(2.2);
     expect((window ?? NaN) / (ground ?? NaN)).toBeLessThan(3.2);
-    const ledger = computeReceptorLedger(read(value), 'w');
+    const ledger = computeReceptorLedger(readInput(value), 'w');
     expect(ledger.openAreaM2).toBeNull();
     expect(ledger.days[3]?.sunHours.lost).toBeGreaterThan(0.5);
   });
